@@ -1,0 +1,2 @@
+/** A forecast as data, and a reader for each form it arrives in. */
+export * from './model';

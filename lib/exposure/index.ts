@@ -1,0 +1,2 @@
+/** Who and what is in the way: layers, their readers, and places in typed arrays. */
+export * from './model';

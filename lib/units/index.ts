@@ -1,0 +1,3 @@
+/** Quantities: conversions, wind thresholds, and how they are written for people. */
+export * from './convert';
+export * from './thresholds';

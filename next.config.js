@@ -1,0 +1,9 @@
+/** @type {import('next').NextConfig} */
+export default {
+  reactStrictMode: true,
+  poweredByHeader: false,
+  // The process serves on loopback by default; development reload needs these origins named.
+  allowedDevOrigins: ['127.0.0.1', 'localhost'],
+  // Compression belongs to the HTTP server that fronts both pages and API.
+  compress: false,
+};
