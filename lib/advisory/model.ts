@@ -37,6 +37,8 @@ export const advisorySchema = z.object({
   centre: z.string().trim().min(1).max(120),
   issuedAt: instant,
   nextDueAt: instant.optional(),
+  /** Forecast time by which the storm is gone, where the centre gives one without a position. */
+  dissipatesAt: instant.optional(),
   averaging: z.enum(['1-min', '10-min']),
   points: z.array(pointSchema).min(1, 'an advisory needs at least one point').max(400),
 });
