@@ -1,3 +1,5 @@
 /** Quantities: conversions, wind thresholds, and how they are written for people. */
 export * from './convert';
+export * from './format';
+export * from './formatTime';
 export * from './thresholds';
