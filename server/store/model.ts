@@ -46,7 +46,7 @@ export interface NewLayer {
 }
 
 /** Bulk that belongs to a revision, served over HTTP and cached for ever. */
-export const BULK_NAMES = ['assets', 'peak', 'arrival', 'chance34', 'chance50', 'chance64'] as const;
+export const BULK_NAMES = ['assets', 'marks', 'peak', 'arrival', 'chance34', 'chance50', 'chance64'] as const;
 export type BulkName = (typeof BULK_NAMES)[number];
 
 export interface NewImpact {

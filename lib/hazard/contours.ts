@@ -1,0 +1,24 @@
+import { contours } from 'd3-contour';
+import { rewind } from '@turf/turf';
+import type { MultiPolygon, Position } from 'geojson';
+import { cutAtAntimeridian } from '../geo';
+import type { Grid } from './grid';
+
+/** Coordinates are rounded to this many decimals of a degree (about 100 m). */
+const DECIMALS = 3;
+
+/**
+ * Where a gridded field is at or above a level, as an RFC 7946 MultiPolygon (right-hand rule, cut at the antimeridian), with
+ * linear interpolation between grid points; null where it nowhere is. Values are in grid order.
+ */
+export function areaAtOrAbove(grid: Grid, values: Float32Array | Float64Array, level: number): MultiPolygon | null {
+  const [contour] = contours().size([grid.columns, grid.rows]).thresholds([level])(Array.from(values));
+  const toPosition = ([x, y]: Position): Position => [round(grid.west + (x - 0.5) * grid.stepLon), round(grid.south + (y - 0.5) * grid.stepLat)];
+  const polygons = contour.coordinates
+    .map((polygon) => polygon.map((ring) => ring.map(toPosition)).filter((ring) => ring.length >= 4))
+    .filter((polygon) => polygon.length > 0);
+  if (polygons.length === 0) return null;
+  return cutAtAntimeridian(rewind({ type: 'MultiPolygon', coordinates: polygons } as MultiPolygon, { reverse: false }) as MultiPolygon);
+}
+
+const round = (degrees: number): number => Number(degrees.toFixed(DECIMALS));

@@ -1,0 +1,231 @@
+import { EARTH_RADIUS_KM } from '../geo';
+import { FRAME } from './paths';
+import type { Paths } from './paths';
+import { BINS, BINS_PER_ROOT_KM, QUADRANTS } from './stormTable';
+import type { StormTable } from './stormTable';
+
+/** Intervals that touch the core are cut this many times: across the eye the wind rises, falls and rises within the hour. */
+const CORE_CUTS = 6;
+/** The core, in radii of maximum wind. */
+const CORE_RADII = 2;
+
+const NE = 0;
+const SE = BINS;
+const SW = 2 * BINS;
+const NW = 3 * BINS;
+
+/**
+ * One storm path passing one place: the kernel. Fields hold the answer of the last call: winds in kt at 10 m over water,
+ * times in lead hours, NaN for "never".
+ *
+ * The wind is evaluated at the nodes within reach, more often near the core, at the top of each rise, and once more beside each
+ * crossing of a threshold, so that times hang little on how far apart the nodes are.
+ */
+export class Passage {
+  peakKt = 0;
+  peakLead = NaN;
+  readonly arrival = new Float64Array(3);
+  readonly end = new Float64Array(3);
+
+  private readonly table: StormTable;
+  private readonly paths: Paths;
+  private readonly times: Float64Array;
+  private readonly winds: Float64Array;
+  private base = 0;
+  private px = 0;
+  private py = 0;
+  private pz = 0;
+  private lastRadiusKm = 0;
+
+  constructor(table: StormTable, paths: Paths) {
+    this.table = table;
+    this.paths = paths;
+    this.times = new Float64Array(paths.nodes * (CORE_CUTS + 1));
+    this.winds = new Float64Array(paths.nodes * (CORE_CUTS + 1));
+  }
+
+  /**
+   * Path `path` past the place with unit vector (x, y, z), nodes `first` to `last`, against three rising thresholds (kt, marine).
+   * Returns false, leaving the fields as they were, when the wind stays under the paths' limit.
+   */
+  over(path: number, first: number, last: number, x: number, y: number, z: number, kt34: number, kt50: number, kt64: number): boolean {
+    this.base = path * this.paths.nodes;
+    this.px = x;
+    this.py = y;
+    this.pz = z;
+    const samples = this.sample(first, last);
+    if (samples === 0) return false;
+    this.cross(0, kt34, samples);
+    this.cross(1, kt50, samples);
+    this.cross(2, kt64, samples);
+    return true;
+  }
+
+  /** Fills times (in nodes) and winds; returns how many, 0 when all winds are under the limit. Sets the peak. */
+  private sample(first: number, last: number): number {
+    const { times, winds, table } = this;
+    let n = 0;
+    let peak = 0;
+    let peakAt = NaN;
+    let before = 0;
+    let here = this.windAtNode(first);
+    let hereRadius = this.lastRadiusKm;
+    times[n] = first;
+    winds[n++] = here;
+    if (here > peak) {
+      peak = here;
+      peakAt = first;
+    }
+    for (let i = first; i < last; i++) {
+      const next = this.windAtNode(i + 1);
+      const nextRadius = this.lastRadiusKm;
+      const core = CORE_RADII * table.radiusMaxWindKm[i] * this.paths.size[this.base + i];
+      if (hereRadius < core || nextRadius < core) {
+        for (let cut = 1; cut < CORE_CUTS; cut++) {
+          const wind = this.windBetween(i, cut / CORE_CUTS);
+          times[n] = i + cut / CORE_CUTS;
+          winds[n++] = wind;
+          if (wind > peak) {
+            peak = wind;
+            peakAt = times[n - 1];
+          }
+        }
+      } else if (i > first && here > before && here >= next) {
+        // The top of a rise: the parabola through three nodes says where.
+        const shift = (0.5 * (before - next)) / (before - 2 * here + next);
+        if (shift > 0.02 || shift < -0.02) {
+          const wind = shift > 0 ? this.windBetween(i, shift) : this.windBetween(i - 1, 1 + shift);
+          if (wind > here && (shift > 0 || times[n - 2] < i + shift)) {
+            if (shift > 0) {
+              times[n] = i + shift;
+              winds[n++] = wind;
+            } else {
+              times[n] = times[n - 1];
+              winds[n] = winds[n - 1];
+              times[n - 1] = i + shift;
+              winds[n - 1] = wind;
+              n++;
+            }
+            if (wind > peak) {
+              peak = wind;
+              peakAt = i + shift;
+            }
+          }
+        }
+      }
+      times[n] = i + 1;
+      winds[n++] = next;
+      if (next > peak) {
+        peak = next;
+        peakAt = i + 1;
+      }
+      before = here;
+      here = next;
+      hereRadius = nextRadius;
+    }
+    if (peak < this.paths.limitKt) return 0;
+    this.peakKt = peak;
+    this.peakLead = this.lead(peakAt);
+    return n;
+  }
+
+  /** First and last time at or above a threshold. */
+  private cross(index: 0 | 1 | 2, kt: number, samples: number): void {
+    const { times, winds } = this;
+    if (this.peakKt < kt) {
+      this.arrival[index] = NaN;
+      this.end[index] = NaN;
+      return;
+    }
+    let rise = 0;
+    while (winds[rise] < kt) rise++;
+    let fall = samples - 1;
+    while (winds[fall] < kt) fall--;
+    this.arrival[index] = this.lead(rise === 0 ? times[0] : this.crossing(times[rise - 1], winds[rise - 1], times[rise], winds[rise], kt));
+    this.end[index] = this.lead(fall === samples - 1 ? times[fall] : this.crossing(times[fall], winds[fall], times[fall + 1], winds[fall + 1], kt));
+  }
+
+  /** Where the wind passes `kt` between two samples: two steps of false position, each with a wind of its own. */
+  private crossing(t0: number, w0: number, t1: number, w1: number, kt: number): number {
+    for (let step = 0; step < 2; step++) {
+      const t = t0 + ((kt - w0) / (w1 - w0)) * (t1 - t0);
+      const node = Math.min(Math.floor(t0), this.paths.nodes - 2);
+      const w = this.windBetween(node, t - node);
+      if (w >= kt === w1 >= kt) {
+        t1 = t;
+        w1 = w;
+      } else {
+        t0 = t;
+        w0 = w;
+      }
+      if (w1 === w0) return t1;
+    }
+    return t0 + ((kt - w0) / (w1 - w0)) * (t1 - t0);
+  }
+
+  /** Lead hours at a time counted in nodes. */
+  private lead(nodeTime: number): number {
+    const { leadHours } = this.table;
+    const i = Math.min(Math.floor(nodeTime), leadHours.length - 2);
+    return leadHours[i] + (nodeTime - i) * (leadHours[i + 1] - leadHours[i]);
+  }
+
+  private windAtNode(i: number): number {
+    const { frame, ratio, size } = this.paths;
+    const at = this.base + i;
+    const o = at * FRAME;
+    const east = this.px * frame[o + 3] + this.py * frame[o + 4];
+    const north = this.px * frame[o + 5] + this.py * frame[o + 6] + this.pz * frame[o + 7];
+    return ratio[at] * this.lookUp(i * QUADRANTS * BINS, east, north, size[at]);
+  }
+
+  private windBetween(i: number, f: number): number {
+    const { frame, ratio, size } = this.paths;
+    const at = this.base + i;
+    const o = at * FRAME;
+    const p = o + FRAME;
+    const east0 = this.px * frame[o + 3] + this.py * frame[o + 4];
+    const east1 = this.px * frame[p + 3] + this.py * frame[p + 4];
+    const north0 = this.px * frame[o + 5] + this.py * frame[o + 6] + this.pz * frame[o + 7];
+    const north1 = this.px * frame[p + 5] + this.py * frame[p + 6] + this.pz * frame[p + 7];
+    const east = east0 + f * (east1 - east0);
+    const north = north0 + f * (north1 - north0);
+    const s = size[at] + f * (size[at + 1] - size[at]);
+    const row = i * QUADRANTS * BINS;
+    const wind0 = this.lookUp(row, east, north, s);
+    const wind1 = this.lookUp(row + QUADRANTS * BINS, east, north, s);
+    return (ratio[at] + f * (ratio[at + 1] - ratio[at])) * (wind0 + f * (wind1 - wind0));
+  }
+
+  /**
+   * Wind of the tabulated storm at a place seen from its centre: `east` and `north` are the place's components in the centre's
+   * frame, so that their length is the sine of the angular distance and their direction the azimuth. Neighbouring quadrants are
+   * blended with squared-cosine weights, exact at NE, SE, SW and NW.
+   */
+  private lookUp(row: number, east: number, north: number, size: number): number {
+    const sin2 = east * east + north * north;
+    const sin = Math.sqrt(sin2);
+    const radiusKm = EARTH_RADIUS_KM * sin * (1 + sin2 * (1 / 6 + sin2 * 0.075));
+    this.lastRadiusKm = radiusKm;
+    const position = Math.sqrt(radiusKm / size) * BINS_PER_ROOT_KM;
+    if (position >= BINS - 2) return 0;
+    const bin = position | 0;
+    const f = position - bin;
+    const k = sin2 > 0 ? (2 * east * north) / sin2 : 0;
+    let first: number;
+    let second: number;
+    if (Math.abs(east) >= Math.abs(north)) {
+      first = east > 0 ? NE : SW;
+      second = east > 0 ? SE : NW;
+    } else {
+      first = north > 0 ? NE : SW;
+      second = north > 0 ? NW : SE;
+    }
+    const { windKt } = this.table;
+    const a = row + first + bin;
+    const b = row + second + bin;
+    const windA = windKt[a] + f * (windKt[a + 1] - windKt[a]);
+    const windB = windKt[b] + f * (windKt[b + 1] - windKt[b]);
+    return windB + 0.5 * (1 + k) * (windA - windB);
+  }
+}
