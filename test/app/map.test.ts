@@ -1,0 +1,116 @@
+import { WebMercatorViewport } from '@deck.gl/core';
+import { booleanPointInPolygon } from '@turf/turf';
+import { describe, expect, test } from 'vitest';
+import { boundsOf, fitted, kmPerPixel, panned, project, unproject } from '../../app/map/mercator';
+import { graticule } from '../../app/map/graticule';
+import { placeLabels } from '../../app/map/labels';
+import { scaleLength } from '../../app/map/scaleBar';
+import { outlinesOf, polygonHolds } from '../../app/map/shapes';
+
+const size = { width: 900, height: 600 };
+const none = { top: 0, right: 0, bottom: 0, left: 0 };
+
+describe('the map and the labels over it agree', () => {
+  test.each([
+    [-55.2, 25.1, 6.3],
+    [0, -41.9, 2.1],
+    [178.4, 19.7, 7.8],
+  ])('a place is projected where deck.gl draws it (camera at %d, %d)', (lon, lat, zoom) => {
+    const viewport = new WebMercatorViewport({ ...size, longitude: lon, latitude: lat, zoom });
+    for (const [dLon, dLat] of [[0, 0], [0.4, 0.3], [-1.1, 0.7]]) {
+      const [x, y] = project({ lon, lat, zoom }, size, lon + dLon, lat + dLat);
+      const [deckX, deckY] = viewport.project([lon + dLon, lat + dLat]);
+      expect(x).toBeCloseTo(deckX, 2);
+      expect(y).toBeCloseTo(deckY, 2);
+    }
+  });
+
+  test('a pixel names the place that is drawn there', () => {
+    const camera = { lon: 179.5, lat: -17, zoom: 5 };
+    const [x, y] = project(camera, size, -178.5, -16);
+    const [lon, lat] = unproject(camera, size, x, y);
+    expect(lon).toBeCloseTo(-178.5, 9);
+    expect(lat).toBeCloseTo(-16, 9);
+  });
+
+  test('one pixel spans the published ground resolution at the equator: 78,271.5 m at zoom 0 of a 512 px world (OGC Two Dimensional Tile Matrix Set, WebMercatorQuad, on the 6378.137 km sphere)', () => {
+    expect((kmPerPixel({ lon: 0, lat: 0, zoom: 0 }) * 1000 * 6378.137) / 6371.0088).toBeCloseTo(78_271.517, 1);
+  });
+});
+
+describe('the view', () => {
+  test('fits all of a box inside the padding', () => {
+    const bounds = { west: -59, south: 22, east: -53, north: 27.5 };
+    const camera = fitted(bounds, size, { top: 20, right: 30, bottom: 90, left: 40 }, 12);
+    const [left, top] = project(camera, size, bounds.west, bounds.north);
+    const [right, bottom] = project(camera, size, bounds.east, bounds.south);
+    expect(left).toBeGreaterThanOrEqual(39.9);
+    expect(right).toBeLessThanOrEqual(870.1);
+    expect(top).toBeGreaterThanOrEqual(19.9);
+    expect(bottom).toBeLessThanOrEqual(510.1);
+    expect(Math.min(Math.abs(left - 40) + Math.abs(right - 870), Math.abs(top - 20) + Math.abs(bottom - 510))).toBeLessThan(0.5);
+  });
+
+  test('goes the short way round where places lie on both sides of the 180th meridian', () => {
+    const bounds = boundsOf([[178, -18], [-179, -16]])!;
+    expect(bounds.east - bounds.west).toBeCloseTo(3, 9);
+    expect(fitted(bounds, size, none).lon).toBeCloseTo(179.5, 6);
+  });
+
+  test('panning by the width of the world comes back to the same place', () => {
+    expect(panned({ lon: 10, lat: 0, zoom: 2 }, 512 * 4, 0).lon).toBeCloseTo(10, 9);
+  });
+});
+
+test('graticule lines stand at least 110 px apart and are named by round degrees', () => {
+  for (const zoom of [2, 4.4, 6, 7.3, 9]) {
+    const lines = graticule({ lon: -55, lat: 25, zoom }, size);
+    expect((lines.step * 512 * 2 ** zoom) / 360).toBeGreaterThanOrEqual(110);
+    for (const lat of lines.lats) expect(Math.abs(lat / lines.step - Math.round(lat / lines.step))).toBeLessThan(1e-6);
+  }
+});
+
+test('a scale bar of 100 km is 54 nmi long, as a nautical mile is 1.852 km', () => {
+  const bar = scaleLength(1, 'km', 149);
+  expect(bar).toEqual({ value: 100, px: 100 });
+  const nautical = scaleLength(1, 'nmi', 149);
+  expect(nautical.value).toBe(50);
+  expect(nautical.px).toBeCloseTo(92.6, 6);
+});
+
+describe('labels', () => {
+  const label = (id: string, x: number, y: number, priority = 0) => ({ id, x, y, text: 'Port Ansel', priority, size: 13, gap: 8 });
+
+  test('never overlap; the more important one stays', () => {
+    const placed = placeLabels(Array.from({ length: 30 }, (_, i) => label(String(i), 300 + i, 300, i)), size);
+    expect(placed[0].id).toBe('29');
+    const boxes = placed.map(({ textX, textY, anchor, text, size: height }) => {
+      const width = text.length * height * 0.6;
+      const left = anchor === 'start' ? textX : anchor === 'end' ? textX - width : textX - width / 2;
+      return { left, right: left + width, top: textY - height / 2, bottom: textY + height / 2 };
+    });
+    boxes.forEach((a, i) => boxes.slice(i + 1).forEach((b) => expect(a.right < b.left || b.right < a.left || a.bottom < b.top || b.bottom < a.top).toBe(true)));
+  });
+
+  test('turn to the left of a point at the right edge of the map', () => {
+    expect(placeLabels([label('a', 880, 300)], size)[0].anchor).toBe('end');
+  });
+});
+
+describe('polygons', () => {
+  const holed = [
+    [[0, 0], [10, 0], [10, 10], [0, 10], [0, 0]],
+    [[4, 4], [6, 4], [6, 6], [4, 6], [4, 4]],
+  ];
+
+  test('a place is inside a polygon exactly where turf says so', () => {
+    for (let lon = -0.95; lon < 11; lon += 0.7)
+      for (let lat = -0.95; lat < 11; lat += 0.7)
+        expect(polygonHolds(holed, lon, lat), `${lon} ${lat}`).toBe(booleanPointInPolygon([lon, lat], { type: 'Polygon', coordinates: holed }));
+  });
+
+  test('the cut at the 180th meridian is not drawn as an outline', () => {
+    const half = [[[170, 0], [180, 0], [180, 5], [170, 5], [170, 0]]];
+    expect(outlinesOf([half])).toEqual([[[170, 0], [180, 0]], [[180, 5], [170, 5], [170, 0]]]);
+  });
+});
