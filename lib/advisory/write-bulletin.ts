@@ -1,10 +1,9 @@
 import { THRESHOLD_KEYS } from '../units';
+import { MONTHS, WEEKDAYS } from './bulletin/times';
 import { compassName, motionBetween } from './motion';
 import { carriedStage } from './stage';
 import type { Advisory, Point, QuadrantRadii, Stage } from './model';
 
-const MONTHS = ['JAN', 'FEB', 'MAR', 'APR', 'MAY', 'JUN', 'JUL', 'AUG', 'SEP', 'OCT', 'NOV', 'DEC'];
-const DAYS = ['SUN', 'MON', 'TUE', 'WED', 'THU', 'FRI', 'SAT'];
 const HOUR_MS = 3_600_000;
 /** Later points are outlook, as the product has had it since 2003. */
 const OUTLOOK_AFTER_HOURS = 72;
@@ -52,7 +51,7 @@ export function writeBulletin(advisory: Advisory): string {
 function heading({ storm, number, centre, issuedAt }: Advisory, first: Point): string[] {
   const time = new Date(issuedAt);
   const clock = `${two(time.getUTCHours())}${two(time.getUTCMinutes())} UTC`;
-  const date = `${DAYS[time.getUTCDay()]} ${MONTHS[time.getUTCMonth()]} ${two(time.getUTCDate())} ${time.getUTCFullYear()}`;
+  const date = `${WEEKDAYS[time.getUTCDay()]} ${MONTHS[time.getUTCMonth()]} ${two(time.getUTCDate())} ${time.getUTCFullYear()}`;
   return [
     'ZCZC',
     `TTAA00 XXXX ${two(time.getUTCDate())}${two(time.getUTCHours())}${two(time.getUTCMinutes())}`,
@@ -82,7 +81,7 @@ function located({ averaging, points }: Advisory, first: Point): string[] {
   if (first.eyeDiameterNm !== undefined) lines.push(`EYE DIAMETER ${three(first.eyeDiameterNm)} NM`);
   const gust = first.gustKt === undefined ? '' : ` WITH GUSTS TO ${three(first.gustKt)} KT`;
   lines.push(`MAX SUSTAINED WINDS ${three(first.maxWindKt)} KT${gust}.`, ...rings(first, 7));
-  if (averaging === '10-min') lines.push('WINDS ARE 10-MINUTE AVERAGES.');
+  lines.push(`WINDS ARE ${averaging === '10-min' ? '10' : '1'}-MINUTE AVERAGES.`);
   lines.push(
     'WINDS VARY GREATLY IN EACH QUADRANT.  RADII IN NAUTICAL',
     'MILES ARE THE LARGEST RADII EXPECTED ANYWHERE IN THAT QUADRANT.',

@@ -1,0 +1,65 @@
+import { advisorySchema } from './model';
+import { checkAdvisory } from './checks';
+import { shown } from './instants';
+import type { Draft } from './draft';
+import type { Advisory, Format, InputError, Reading } from './model';
+
+type Issue = { path: readonly PropertyKey[]; message: string; code?: string | undefined };
+
+/** The last step of every format: the model's bounds, the order of times, and the warnings. */
+export function finish(format: Format, draft: Draft): Reading {
+  const parsed = advisorySchema.safeParse(draft.advisory);
+  if (!parsed.success) {
+    return { ok: false, format, errors: parsed.error.issues.map((issue) => placed(draft, issue.path, describe(issue, draft.advisory))) };
+  }
+  const errors = orderErrors(draft, parsed.data);
+  if (errors.length > 0) return { ok: false, format, errors };
+  const checked = checkAdvisory(parsed.data).map((warning) => ({ ...draft.placeOf(keyOf(warning.path ?? '')), ...warning }));
+  return { ok: true, format, advisory: parsed.data, warnings: [...draft.warnings, ...checked] };
+}
+
+/** Points go forward in time, each at a time of its own. */
+function orderErrors(draft: Draft, { points }: Advisory): InputError[] {
+  return points.slice(1).flatMap((point, index) => {
+    const before = points[index]!;
+    const step = Date.parse(point.validAt) - Date.parse(before.validAt);
+    if (step > 0) return [];
+    const line = draft.placeOf(`points.${index}`).line;
+    const other = line === undefined ? `points[${index}]` : `the point on line ${line}`;
+    const message = step === 0 ? `two points at ${point.validAt}, this and ${other}: keep one of them` : `${point.validAt} is earlier than ${before.validAt} of ${other}: put the points in order of time`;
+    return [placed(draft, ['points', index + 1, 'validAt'], message)];
+  });
+}
+
+function placed(draft: Draft, path: readonly PropertyKey[], message: string): InputError {
+  return { ...draft.placeOf(path.join('.')), ...(path.length === 0 ? {} : { path: pathText(path) }), message };
+}
+
+/** `points[3].lat`, as a programmer would write it. */
+export const pathText = (path: readonly PropertyKey[]): string => path.map((part, index) => (typeof part === 'number' || /^\d+$/.test(String(part)) ? `[${String(part)}]` : `${index === 0 ? '' : '.'}${String(part)}`)).join('');
+
+/** The same path as places are kept under: `points.3.lat`. */
+const keyOf = (path: string): string => path.replace(/\[(\d+)\]/g, '.$1');
+
+function describe({ path, message, code }: Issue, root: unknown): string {
+  const found = valueAt(root, path);
+  const field = path.filter((part) => typeof part === 'string' && !/^\d+$/.test(part)).at(-1);
+  if (found === undefined && code === 'invalid_type') return `${String(field ?? 'the advisory')} is missing: ${expectation(message)}`;
+  return `${expectation(message)}; found ${found === undefined ? 'nothing' : quoted(found)}`;
+}
+
+const expectation = (message: string): string => message.replace(/^Invalid input: /, '').replace(/, received .*$/, '').replace(/^Too (?:small|big): /, '');
+
+function quoted(value: unknown): string {
+  if (typeof value === 'number') return String(value);
+  return shown(JSON.stringify(value) ?? typeof value);
+}
+
+function valueAt(root: unknown, path: readonly PropertyKey[]): unknown {
+  let value = root;
+  for (const part of path) {
+    if (typeof value !== 'object' || value === null) return undefined;
+    value = Object.hasOwn(value, part) ? (value as Record<PropertyKey, unknown>)[part] : undefined;
+  }
+  return value;
+}
