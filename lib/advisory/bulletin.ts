@@ -34,7 +34,7 @@ export function readBulletin(text: string): Read {
   if (another !== null) warnings.push({ code: 'several-bulletins', line: another.titleLine.number, message: 'a second bulletin starts here and was not read: give each bulletin on its own' });
 
   const errors = [...body.errors, ...missing(body, lines.at(-1)!, lines)];
-  if (errors.length > 0) return failed(...errors);
+  if (errors.length > 0) return failed(errors);
   if (!body.closed) warnings.push({ code: 'end-missing', line: lines.at(-1)!.number, message: 'the text ends without NEXT ADVISORY, $$ or NNNN: check that nothing was cut off' });
   return { ok: true, draft: assemble(header, body, warnings) };
 }

@@ -8,7 +8,7 @@ export type Column =
   | { kind: 'quantity'; field: 'maxWindKt' | 'gustKt' | 'minPressureHpa' | 'radiusMaxWindNm' | 'eyeDiameterNm'; toModel: (value: number) => number }
   | { kind: 'radius'; threshold: ThresholdKey; quadrant: keyof QuadrantRadii; toModel: (value: number) => number }
   | { kind: 'about'; field: AboutField }
-  | { kind: 'unit-missing'; hint: string };
+  | { kind: 'unit-missing'; field: string; hint: string };
 
 /** What is said of the whole advisory, the same in every row. */
 export type AboutField = 'stormName' | 'stormId' | 'number' | 'centre' | 'issuedAt' | 'nextDueAt' | 'dissipatesAt' | 'averaging';
@@ -70,11 +70,11 @@ export function columnOf(name: string): Column | null {
     const match = new RegExp(`^(?:${names})([a-z]*)$`).exec(key);
     if (match === null) continue;
     if (Object.hasOwn(units, match[1]!)) return { kind: 'quantity', field, toModel: units[match[1]!]! };
-    if (match[1] === '') return { kind: 'unit-missing', hint };
+    if (match[1] === '') return { kind: 'unit-missing', field, hint };
   }
   const radius = RADIUS.exec(key);
   if (radius === null) return null;
   const [, threshold, quadrant, unit] = radius as unknown as [string, ThresholdKey, keyof QuadrantRadii, string];
   if (Object.hasOwn(LENGTH_UNITS, unit)) return { kind: 'radius', threshold, quadrant, toModel: LENGTH_UNITS[unit]! };
-  return unit === '' ? { kind: 'unit-missing', hint: `r${threshold}${quadrant[0]!.toUpperCase()}${quadrant[1]}Nm, ...Km or ...Mi` } : null;
+  return unit === '' ? { kind: 'unit-missing', field: `${threshold}${quadrant}`, hint: `r${threshold}${quadrant[0]!.toUpperCase()}${quadrant[1]}Nm, ...Km or ...Mi` } : null;
 }

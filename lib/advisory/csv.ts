@@ -1,8 +1,12 @@
 import { CsvError, parse } from 'csv-parse/browser/esm/sync';
 import { failed } from './draft';
+import { MOST_POINTS } from './model';
 import { readTable } from './table';
-import type { Place, Read } from './draft';
+import type { Read } from './draft';
 import type { Row } from './table';
+
+/** Far above what a forecast has; a file with more holds something else. */
+const MOST_COLUMNS = 1000;
 
 /** A record as csv-parse gives it with `info`: its fields, and the line it ends on. */
 interface CsvRecord {
@@ -17,7 +21,7 @@ interface CsvRecord {
 export function readCsv(text: string): Read {
   let records: CsvRecord[];
   try {
-    records = parse(text, { delimiter: delimiterOf(text), info: true, trim: true, skip_empty_lines: true, relax_column_count: true }) as unknown as CsvRecord[];
+    records = parse(text, { delimiter: delimiterOf(text), info: true, trim: true, skip_empty_lines: true, relax_column_count: true, to: MOST_POINTS + 2 }) as unknown as CsvRecord[];
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     return failed({ ...(typeof error.lines === 'number' ? { line: error.lines } : {}), message: `this is not CSV: ${mendFor(error.code)}` });
@@ -25,6 +29,7 @@ export function readCsv(text: string): Read {
   const [header, ...body] = records;
   if (header === undefined) return failed({ line: 1, message: 'no header line was found: the first line names the columns' });
   const names = header.record;
+  if (names.length > MOST_COLUMNS) return failed({ line: header.info.lines, message: `the header names ${names.length} columns, more than the ${MOST_COLUMNS} that any forecast needs` });
   const twice = names.find((name, index) => name !== '' && names.indexOf(name) !== index);
   if (twice !== undefined) return failed({ line: header.info.lines, message: `the header names "${twice}" twice: keep one` });
   if (body.length === 0) return failed({ line: header.info.lines, message: 'no point follows the header: add a row for each position' });
@@ -32,26 +37,23 @@ export function readCsv(text: string): Read {
   const long = body.find(({ record }) => record.length > names.length);
   if (long !== undefined) return failed({ line: long.info.lines, message: `this row has ${long.record.length} fields but the header names ${names.length}: put text that holds the separator in double quotes` });
   const lines = text.split(/\r\n|\n|\r/);
-  return readTable(body.map((record) => rowOf(record, names, lines[record.info.lines - 1] ?? '', delimiterOf(text))), 'column');
+  const placing = (info: CsvRecord['info']): Row['placeOf'] => placesOn(info.lines, lines[info.lines - 1] ?? '', names, delimiterOf(text));
+  const rows = body.map(({ record, info }) => ({ cells: new Map(names.flatMap((name, index) => (name === '' ? [] : [[name, record[index]] as const]))), placeOf: placing(info) }));
+  return readTable(rows, 'column', placing(header.info));
 }
 
-function rowOf({ record, info }: CsvRecord, names: readonly string[], physical: string, delimiter: string): Row {
-  // With quotes about, fields cannot be counted by separators: the line alone is given.
-  const starts = physical.includes('"') ? null : fieldStarts(physical, delimiter);
-  const placeOf = (name: string): Place => {
-    const column = starts?.[names.indexOf(name)];
-    return column === undefined ? { line: info.lines } : { line: info.lines, column };
-  };
-  return { cells: new Map(names.flatMap((name, index) => (name === '' ? [] : [[name, record[index]] as const]))), placeOf };
-}
-
-function fieldStarts(line: string, delimiter: string): number[] {
+/** Where the fields of a line start. With quotes about, they cannot be counted by separators: the line alone is given. */
+function placesOn(line: number, physical: string, names: readonly string[], delimiter: string): Row['placeOf'] {
+  const starts = new Map<string, number>();
   let column = 1;
-  return line.split(delimiter).map((field) => {
-    const start = column + (field.length - field.trimStart().length);
-    column += field.length + 1;
-    return start;
+  physical.split(delimiter).forEach((field, index) => {
+    starts.set(names[index] ?? '', column + (field.length - field.trimStart().length));
+    column += field.length + delimiter.length;
   });
+  return (name) => {
+    const start = physical.includes('"') || name === '' ? undefined : starts.get(name);
+    return start === undefined ? { line } : { line, column: start };
+  };
 }
 
 /** The separator that the header line holds most of. */

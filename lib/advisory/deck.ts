@@ -30,7 +30,7 @@ export function listDeck(text: string): DeckEntry[] {
  */
 export function readDeck(text: string, { technique, cycle }: ReadOptions = {}): Read {
   const { lines, errors } = parse(text);
-  if (errors.length > 0) return failed(...errors);
+  if (errors.length > 0) return failed(errors);
   const all = forecastsIn(lines);
   const asked = all.filter((forecast) => (technique === undefined || forecast.technique === technique.toUpperCase()) && (cycle === undefined || forecast.cycle === cycle));
   if (asked.length === 0) {

@@ -23,7 +23,7 @@ export interface Draft {
 
 export type Read = { ok: true; draft: Draft } | { ok: false; errors: InputError[] };
 
-export const failed = (...errors: InputError[]): Read => ({ ok: false, errors });
+export const failed = (errors: InputError | readonly InputError[]): Read => ({ ok: false, errors: [errors].flat() as InputError[] });
 
 /** What is known of a path, or of the nearest part around it. */
 export function nearest<T>(known: ReadonlyMap<string, T>, path: string): T | undefined {

@@ -1,16 +1,17 @@
 import { advisorySchema } from './model';
 import { checkAdvisory } from './checks';
 import { shown } from './instants';
+import { THRESHOLD_KEYS } from '../units';
 import type { Draft } from './draft';
 import type { Advisory, Format, InputError, Reading } from './model';
 
-type Issue = { path: readonly PropertyKey[]; message: string; code?: string | undefined };
+type Issue = { path: readonly PropertyKey[]; message: string; code?: string | undefined; keys?: readonly string[] };
 
 /** The last step of every format: the model's bounds, the order of times, and the warnings. */
 export function finish(format: Format, draft: Draft): Reading {
   const parsed = advisorySchema.safeParse(draft.advisory);
   if (!parsed.success) {
-    return { ok: false, format, errors: parsed.error.issues.map((issue) => placed(draft, issue.path, describe(issue, draft.advisory))) };
+    return { ok: false, format, errors: parsed.error.issues.map((issue) => placed(draft, issue.path, describe(issue as Issue, draft.advisory))) };
   }
   const errors = orderErrors(draft, parsed.data);
   if (errors.length > 0) return { ok: false, format, errors };
@@ -35,20 +36,18 @@ function placed(draft: Draft, path: readonly PropertyKey[], message: string): In
   return { ...draft.placeOf(path.join('.')), ...(path.length === 0 ? {} : { path: pathText(path) }), message };
 }
 
-/** `points[3].lat`, as a programmer would write it. */
-export const pathText = (path: readonly PropertyKey[]): string => path.map((part, index) => (typeof part === 'number' || /^\d+$/.test(String(part)) ? `[${String(part)}]` : `${index === 0 ? '' : '.'}${String(part)}`)).join('');
+/** `points[3].radiiNm.34.ne`. */
+export const pathText = (path: readonly PropertyKey[]): string => path.map((part, index) => (typeof part === 'number' ? `[${String(part)}]` : `${index === 0 ? '' : '.'}${String(part)}`)).join('');
 
 /** The same path as places are kept under: `points.3.lat`. */
 const keyOf = (path: string): string => path.replace(/\[(\d+)\]/g, '.$1');
 
-function describe({ path, message, code }: Issue, root: unknown): string {
+function describe({ path, message, code, keys }: Issue, root: unknown): string {
+  if (code === 'unrecognized_keys') return `${(keys ?? []).map((key) => `"${shown(key)}"`).join(', ')} is not known here: radii are given for ${THRESHOLD_KEYS.join(', ')} kt`;
   const found = valueAt(root, path);
-  const field = path.filter((part) => typeof part === 'string' && !/^\d+$/.test(part)).at(-1);
-  if (found === undefined && code === 'invalid_type') return `${String(field ?? 'the advisory')} is missing: ${expectation(message)}`;
-  return `${expectation(message)}; found ${found === undefined ? 'nothing' : quoted(found)}`;
+  const expected = message.replace(/^(?:Invalid input|Invalid option|Too small|Too big): /, '').replace(/, received .*$/, '');
+  return found === undefined ? `${String(path.at(-1))} is missing: ${expected}` : `${expected}; found ${quoted(found)}`;
 }
-
-const expectation = (message: string): string => message.replace(/^Invalid input: /, '').replace(/, received .*$/, '').replace(/^Too (?:small|big): /, '');
 
 function quoted(value: unknown): string {
   if (typeof value === 'number') return String(value);

@@ -11,7 +11,7 @@ const position = z.array(z.number()).min(2, 'a position is [longitude, latitude]
 const geometry = z.discriminatedUnion('type', [
   z.object({ type: z.literal('Point'), coordinates: position }),
   z.object({ type: z.literal('LineString'), coordinates: z.array(position).min(2, 'a line has at least two positions') }),
-]);
+], { error: 'expected a Point or a LineString' });
 const properties = z.record(z.string(), z.unknown()).nullish().transform((given) => given ?? {});
 const feature = z.object({ type: z.literal('Feature'), geometry, properties });
 const collection = z.looseObject({ type: z.literal('FeatureCollection'), features: z.array(feature).min(1, 'no feature is given: add a Point for each position'), properties });
@@ -31,16 +31,16 @@ export function readGeoJson(text: string): Read {
   if (whole === null) return failed({ line: 1, message: 'this GeoJSON holds no features: give a FeatureCollection of Points, or a LineString Feature, with times and winds in the properties' });
   const parsed = collection.safeParse(whole.value);
   if (!parsed.success) {
-    return failed(...parsed.error.issues.map(({ path, message }) => {
+    return failed(parsed.error.issues.map(({ path, message }) => {
       const own = path.slice(whole.prefix);
-      return { path: pathText(own), ...json.placeOf(own.join('.')), message: `${message}: a track is given as Points or as one LineString` };
+      return { path: pathText(own), ...json.placeOf(own.join('.')), message: `${message.replace(/^Invalid input: /, '')}: a track is given as Points or as one LineString with its own properties` };
     }));
   }
   const { features } = parsed.data;
   const path = (index: number): string => (whole.prefix === 0 ? `features.${index}` : '');
   const shared = { ...advisoryMembers(parsed.data), ...parsed.data.properties };
   const lines = features.filter((each) => each.geometry.type === 'LineString');
-  if (lines.length === 0) return readTable(features.map((each, index) => pointRow(each, shared, path(index), json.placeOf)), 'property');
+  if (lines.length === 0) return readTable(features.map((each, index) => pointRow(each, shared, path(index), json.placeOf)), 'property', () => json.placeOf(whole.prefix === 0 ? 'features' : ''));
   if (features.length > 1) return failed({ ...json.placeOf('features'), message: `a track is either Points or one LineString: found ${lines.length} lines among ${features.length} features` });
   return lineRows(features[0]!, shared, path(0), json.placeOf);
 }
@@ -81,6 +81,7 @@ function lineRows({ geometry, properties }: Feature, shared: Record<string, unkn
   return readTable(
     coordinates.map(([lon, lat], index) => row({ ...shared, ...flat(Object.fromEntries(lists.map(([name, value]) => [name, Array.isArray(value) ? value[index] : value]))) }, lon, lat, path, placeOf)),
     'property',
+    () => placeOf(path),
   );
 }
 

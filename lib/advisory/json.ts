@@ -9,10 +9,12 @@ import type { Warning } from './model';
 export function readJson(text: string): Read {
   const json = parseJson(text);
   if (!json.ok) return json;
-  const { value, placeOf } = json;
-  if (typeof value !== 'object' || value === null || Array.isArray(value)) {
+  const { value: given, placeOf } = json;
+  if (typeof given !== 'object' || given === null || Array.isArray(given)) {
     return failed({ line: 1, column: 1, message: 'an advisory is a JSON object with storm, number, centre, issuedAt, averaging and points' });
   }
+  // Numbers such as 2A are text; a plain number means the same as its digits.
+  const value = 'number' in given && typeof given.number === 'number' ? { ...given, number: String(given.number) } : given;
   const parsed = advisorySchema.safeParse(value);
   return { ok: true, draft: { advisory: value, placeOf, warnings: parsed.success ? unread(value, parsed.data, [], placeOf) : [] } };
 }

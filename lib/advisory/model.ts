@@ -30,6 +30,9 @@ export type Point = z.infer<typeof pointSchema>;
 
 export const stormSchema = z.object({ id: z.string().min(1).max(40).optional(), name: z.string().trim().min(1, 'the storm needs a name').max(80) });
 
+/** More points than any forecast has; a file with more holds something else. */
+export const MOST_POINTS = 400;
+
 /** One issued forecast, as data. The first point is the position at or just before issue. */
 export const advisorySchema = z.object({
   storm: stormSchema,
@@ -40,7 +43,7 @@ export const advisorySchema = z.object({
   /** Forecast time by which the storm is gone, where the centre gives one without a position. */
   dissipatesAt: instant.optional(),
   averaging: z.enum(['1-min', '10-min']),
-  points: z.array(pointSchema).min(1, 'an advisory needs at least one point').max(400),
+  points: z.array(pointSchema).min(1, 'an advisory needs at least one point').max(MOST_POINTS, `an advisory has at most ${MOST_POINTS} points`),
 });
 export type Advisory = z.infer<typeof advisorySchema>;
 

@@ -16,6 +16,9 @@ const READERS: Record<Format, (text: string, options: ReadOptions) => Read> = {
   json: readJson,
 };
 
+/** Nobody mends more at once; the first are where to start. */
+const MOST_LISTED = 100;
+
 const NOT_RECOGNISED =
   'this is none of the forms a forecast is read from: a forecast/advisory text bulletin, a comma-delimited forecast deck, CSV with a header naming lat and lon, GeoJSON, or an advisory as JSON';
 
@@ -35,5 +38,9 @@ export function readAdvisory(text: string, options: ReadOptions = {}): Reading {
   const format = options.format ?? detectFormat(plain);
   if (format === null) return { ok: false, format, errors: [{ line: 1, message: NOT_RECOGNISED }] };
   const read = READERS[format](plain, options);
-  return read.ok ? finish(format, read.draft) : { ok: false, format, errors: read.errors };
+  const reading: Reading = read.ok ? finish(format, read.draft) : { ok: false, format, errors: read.errors };
+  return reading.ok ? { ...reading, warnings: listed(reading.warnings, (message) => ({ code: 'more-warnings', message })) } : { ...reading, errors: listed(reading.errors, (message) => ({ message })) };
 }
+
+/** The first of a long list, and how many more there are. */
+const listed = <T>(all: T[], more: (message: string) => T): T[] => (all.length <= MOST_LISTED ? all : [...all.slice(0, MOST_LISTED), more(`and ${all.length - MOST_LISTED} more like these`)]);

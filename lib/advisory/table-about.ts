@@ -13,7 +13,7 @@ interface About {
 const TIMES = new Set<AboutField>(['issuedAt', 'nextDueAt', 'dissipatesAt']);
 
 /** Reads what the rows say of the whole advisory; what they do not say is assumed, with a warning. */
-export function about(rows: readonly Row[], columns: ReadonlyMap<string, Column>, firstValidAt: string | undefined): About {
+export function about(rows: readonly Row[], columns: ReadonlyMap<string, Column>, firstValidAt: string | undefined, headed: Row['placeOf']): About {
   const errors: InputError[] = [];
   const said = new Map<AboutField, string>();
   for (const [name, column] of columns) {
@@ -29,7 +29,7 @@ export function about(rows: readonly Row[], columns: ReadonlyMap<string, Column>
   const assume = (field: AboutField, path: string, value: string, message: string): string => {
     const given = said.get(field);
     if (given !== undefined) return given;
-    warnings.push({ code: `${field.toLowerCase()}-assumed`, path, ...rows[0]?.placeOf(''), message });
+    warnings.push({ code: `${field.toLowerCase()}-assumed`, path, ...headed(''), message });
     return value;
   };
   const issuedAt = assume('issuedAt', 'issuedAt', firstValidAt ?? '', 'no issue time is given: the first position\'s time was taken; add issuedAt');

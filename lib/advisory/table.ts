@@ -1,10 +1,11 @@
-import { columnOf, REQUIRED } from './columns';
 import { failed } from './draft';
 import { about } from './table-about';
+import { tableColumns } from './table-columns';
 import { parseInstant, shown } from './instants';
+import { MOST_POINTS } from './model';
 import type { Column } from './columns';
 import type { Draft, Place, Read } from './draft';
-import type { InputError, Point, QuadrantRadii, Warning } from './model';
+import type { InputError, Point, QuadrantRadii } from './model';
 
 /** A row of a table of points: what each column holds, and where. */
 export interface Row {
@@ -17,15 +18,18 @@ type Radii = Partial<Record<string, Partial<QuadrantRadii>>>;
 
 /**
  * Turns a table of points (CSV rows, GeoJSON properties) into an advisory. Names are those of
- * `columns.ts`, with their units; `word` is what the format calls a name: column or property.
+ * `columns.ts`, with their units. `word` is what the format calls a name: column or property;
+ * `headed` is where names stand, or where the table starts.
  */
-export function readTable(rows: readonly Row[], word: 'column' | 'property'): Read {
-  const named = columnsIn(rows, word);
+export function readTable(rows: readonly Row[], word: 'column' | 'property', headed: Row['placeOf']): Read {
+  const extra = rows[MOST_POINTS];
+  if (extra !== undefined) return failed({ ...extra.placeOf(''), message: `more than ${MOST_POINTS} positions are given: give one forecast of one storm` });
+  const named = tableColumns(rows, word, headed);
   if (!named.ok) return { ok: false, errors: named.errors };
   const errors: InputError[] = [];
   const points = rows.map((row, index) => pointOf(row, index, named.columns, errors));
-  const said = about(rows, named.columns, points[0]?.validAt);
-  if (errors.length + said.errors.length > 0) return failed(...errors, ...said.errors);
+  const said = about(rows, named.columns, points[0]?.validAt, headed);
+  if (errors.length + said.errors.length > 0) return failed([...errors, ...said.errors]);
 
   const placeOf: Draft['placeOf'] = (path) => {
     const [, index, field] = path.split('.');
@@ -37,40 +41,6 @@ export function readTable(rows: readonly Row[], word: 'column' | 'property'): Re
 }
 
 const matches = (column: Column, field: string | undefined): boolean => ('field' in column ? column.field : column.kind === 'time' ? 'validAt' : column.kind) === field;
-
-type Named = { ok: true; columns: Map<string, Column>; warnings: Warning[] } | { ok: false; errors: InputError[] };
-
-/** Matches names to meanings once for all rows. */
-function columnsIn(rows: readonly Row[], word: string): Named {
-  const columns = new Map<string, Column>();
-  const errors: InputError[] = [];
-  const warnings: Warning[] = [];
-  const taken = new Map<string, string>();
-  for (const row of rows) {
-    for (const name of row.cells.keys()) {
-      if (columns.has(name) || taken.has(`?${name}`)) continue;
-      const column = columnOf(name);
-      if (column === null) {
-        taken.set(`?${name}`, name);
-        warnings.push({ code: 'column-unknown', ...row.placeOf(name), message: `the ${word} "${shown(name)}" is not one that is read and was left out` });
-      } else if (column.kind === 'unit-missing') {
-        taken.set(`?${name}`, name);
-        errors.push({ ...row.placeOf(name), message: `the ${word} "${shown(name)}" does not say its unit: name it ${column.hint}` });
-      } else {
-        const key = meaning(column);
-        if (taken.has(key)) errors.push({ ...row.placeOf(name), message: `"${shown(name)}" and "${shown(taken.get(key)!)}" say the same thing: keep one of them` });
-        taken.set(key, name);
-        columns.set(name, column);
-      }
-    }
-  }
-  for (const [key, names] of Object.entries(REQUIRED)) if (!taken.has(key)) errors.push({ ...rows[0]?.placeOf(''), message: `no ${word} gives ${WANTED[key as keyof typeof REQUIRED]}: name one ${names}` });
-  return errors.length > 0 ? { ok: false, errors } : { ok: true, columns, warnings };
-}
-
-const WANTED = { time: 'the time of each position', lat: 'the latitude', lon: 'the longitude', maxWindKt: 'the maximum sustained wind' } as const;
-
-const meaning = (column: Column): string => (column.kind === 'radius' ? `${column.threshold}${column.quadrant}` : 'field' in column ? column.field : column.kind);
 
 /** One row as a point. A value that is not there stays out; one that cannot be read is an error at its place. */
 function pointOf({ cells, placeOf }: Row, index: number, columns: ReadonlyMap<string, Column>, errors: InputError[]): Partial<Point> {

@@ -144,7 +144,7 @@ function dayTime(instant: string): string {
   return `${two(time.getUTCDate())}/${two(time.getUTCHours())}${two(time.getUTCMinutes())}Z`;
 }
 
-/** One line of capitals: a name cannot break the layout it stands in. */
-const capitals = (text: string): string => text.toUpperCase().replace(/\s+/g, ' ').trim();
+/** One line of capitals without brackets or controls: a name cannot break the layout it stands in. */
+const capitals = (text: string): string => text.replace(/[<>\p{Cc}]/gu, ' ').toUpperCase().replace(/\s+/g, ' ').trim() || 'UNNAMED';
 const two = (value: number): string => String(value).padStart(2, '0');
 const three = (value: number): string => String(Math.round(value)).padStart(3);

@@ -1,6 +1,6 @@
 /** Positions, times and winds as bulletins write them. Each takes one line of at most 240 characters. */
 
-const POSITION = /(\d{1,3}(?:\.\d+)?)\s?([NS])[\s,/]{0,3}(\d{1,3}(?:\.\d+)?)\s?([EW])\b/i;
+const POSITION = /(\d{1,3}(?:\.\d+)?)\s?([NS])[\s,/]{0,6}(\d{1,3}(?:\.\d+)?)\s?([EW])\b/i;
 const DAY_TIME = /\b(\d{1,2})\s?\/\s?(\d{4})\s?(?:Z|UTC)?/i;
 const FORECAST = /^(?:\d{1,3}[\s-]?H(?:OU)?RS?\s)?(?:FORECAST|OUTLOOK)\s+VALID\b\s*(.*)$/i;
 const LOCATED = /\b(?:RE-?)?(?:LOCATED|CENTERED|CENTRED)\b/i;
