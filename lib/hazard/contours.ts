@@ -1,5 +1,4 @@
 import { contours } from 'd3-contour';
-import { rewind } from '@turf/turf';
 import type { MultiPolygon, Position } from 'geojson';
 import { cutAtAntimeridian } from '../geo';
 import type { Grid } from './grid';
@@ -18,7 +17,7 @@ export function areaAtOrAbove(grid: Grid, values: Float32Array | Float64Array, l
     .map((polygon) => polygon.map((ring) => ring.map(toPosition)).filter((ring) => ring.length >= 4))
     .filter((polygon) => polygon.length > 0);
   if (polygons.length === 0) return null;
-  return cutAtAntimeridian(rewind({ type: 'MultiPolygon', coordinates: polygons } as MultiPolygon, { reverse: false }) as MultiPolygon);
+  return cutAtAntimeridian({ type: 'MultiPolygon', coordinates: polygons });
 }
 
 const round = (degrees: number): number => Number(degrees.toFixed(DECIMALS));

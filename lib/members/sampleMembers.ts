@@ -55,15 +55,16 @@ export function sampleMembers(track: Track, leadHours: Float64Array, { count, se
     for (let i = 0; i < nodes; i++) {
       const storm = forecast[i];
       const error = errorAt(errors, member, leadHours[i]);
+      const open = openShare(leadHours[i]);
       const place = destination(
         storm.lat,
         storm.lon,
         storm.motionTowardDeg + (Math.atan2(error.crossNmi, error.alongNmi) * 180) / Math.PI,
-        nmiToKm(Math.hypot(error.alongNmi, error.crossNmi)),
+        nmiToKm(open * Math.hypot(error.alongNmi, error.crossNmi)),
       );
       members.lat[row + i] = place.lat;
       members.lon[row + i] = place.lon;
-      const windKt = Math.min(Math.max(storm.maxWindKt + error.intensityKt, LEAST_WIND_KT), GREATEST_WIND_KT);
+      const windKt = Math.min(Math.max(storm.maxWindKt + open * error.intensityKt, LEAST_WIND_KT), GREATEST_WIND_KT);
       members.intensityRatio[row + i] = storm.maxWindKt > 0 ? windKt / storm.maxWindKt : 0;
       members.sizeRatio[row + i] = error.sizeRatio * model.averageToGreatestRadius;
       memberOverLand[i] = land?.isLand(place.lat, place.lon) ? 1 : 0;
@@ -72,6 +73,9 @@ export function sampleMembers(track: Track, leadHours: Float64Array, { count, se
   }
   return members;
 }
+
+/** Before issue the storm has been observed: errors fade to nothing over the six hours before. */
+const openShare = (leadHours: number): number => Math.min(1, Math.max(0, 1 + leadHours / 6));
 
 function errorAt(errors: ErrorSample, member: number, leadHours: number) {
   const knots = errors.leadHours.length;
