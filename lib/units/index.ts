@@ -1,4 +1,5 @@
 /** Quantities: conversions, wind thresholds, and how they are written for people. */
+export * from './averaging';
 export * from './convert';
 export * from './format';
 export * from './formatTime';

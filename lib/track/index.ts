@@ -1,0 +1,10 @@
+/** The storm between its points: position, motion, strength, radii and pressure at any time. */
+export { pressureFromWindHpa, windFromPressureKt } from './atkinsonHolliday1977';
+export { climatologicalVortex, climatologyRadiiKm, motionAsymmetryKt, QUADRANT_AZIMUTHS_DEG, strongSideDeg } from './climatologyRadii';
+export type { Inferred, Knot } from './knots';
+export { hermite, monotoneSlopes } from './monotoneCubic';
+export { willoughbyRadiusMaxWindKm } from './radiusMaxWind';
+export { stormAt } from './stormAt';
+export type { Ring, StormState } from './stormAt';
+export { centreAt, makeTrack } from './track';
+export type { Track } from './track';
