@@ -14,10 +14,13 @@ export function areaAtOrAbove(grid: Grid, values: Float32Array | Float64Array, l
   const [contour] = contours().size([grid.columns, grid.rows]).thresholds([level])(Array.from(values));
   const toPosition = ([x, y]: Position): Position => [round(grid.west + (x - 0.5) * grid.stepLon), round(grid.south + (y - 0.5) * grid.stepLat)];
   const polygons = contour.coordinates
-    .map((polygon) => polygon.map((ring) => ring.map(toPosition)).filter((ring) => ring.length >= 4))
+    .map((polygon) => polygon.map((ring) => withoutRepeats(ring.map(toPosition))).filter((ring) => ring.length >= 4))
     .filter((polygon) => polygon.length > 0);
   if (polygons.length === 0) return null;
   return cutAtAntimeridian({ type: 'MultiPolygon', coordinates: polygons });
 }
+
+/** Corners that rounding has put on one spot are one corner. */
+const withoutRepeats = (ring: Position[]): Position[] => ring.filter(([lon, lat], i) => i === 0 || lon !== ring[i - 1][0] || lat !== ring[i - 1][1]);
 
 const round = (degrees: number): number => Number(degrees.toFixed(DECIMALS));

@@ -1,13 +1,19 @@
 import { EARTH_RADIUS_KM } from '../geo';
 import { FRAME } from './paths';
 import type { Paths } from './paths';
-import { BINS, BINS_PER_ROOT_KM, QUADRANTS } from './stormTable';
+import { BINS, BINS_PER_ROOT, QUADRANTS } from './stormTable';
 import type { StormTable } from './stormTable';
 
 /** Intervals that touch the core are cut this many times: across the eye the wind rises, falls and rises within the hour. */
 const CORE_CUTS = 6;
 /** The core, in radii of maximum wind. */
 const CORE_RADII = 2;
+/** Samples an interval can ask for: its cuts, and a crossing of the radius of maximum wind in each. */
+const MOST_SAMPLES = 2 * CORE_CUTS + 1;
+
+/** A crossing is found when the wind there is this close to the threshold, or after so many steps. */
+const CLOSE_KT = 0.01;
+const MOST_STEPS = 8;
 
 const NE = 0;
 const SE = BINS;
@@ -35,13 +41,14 @@ export class Passage {
   private px = 0;
   private py = 0;
   private pz = 0;
-  private lastRadiusKm = 0;
+  /** Distance at the last look-up, in radii of maximum wind. */
+  private lastRadius = 0;
 
   constructor(table: StormTable, paths: Paths) {
     this.table = table;
     this.paths = paths;
-    this.times = new Float64Array(paths.nodes * (CORE_CUTS + 1));
-    this.winds = new Float64Array(paths.nodes * (CORE_CUTS + 1));
+    this.times = new Float64Array(paths.nodes * MOST_SAMPLES);
+    this.winds = new Float64Array(paths.nodes * MOST_SAMPLES);
   }
 
   /**
@@ -63,13 +70,13 @@ export class Passage {
 
   /** Fills times (in nodes) and winds; returns how many, 0 when all winds are under the limit. Sets the peak. */
   private sample(first: number, last: number): number {
-    const { times, winds, table } = this;
+    const { times, winds } = this;
     let n = 0;
     let peak = 0;
     let peakAt = NaN;
     let before = 0;
     let here = this.windAtNode(first);
-    let hereRadius = this.lastRadiusKm;
+    let hereRadius = this.lastRadius;
     times[n] = first;
     winds[n++] = here;
     if (here > peak) {
@@ -78,11 +85,25 @@ export class Passage {
     }
     for (let i = first; i < last; i++) {
       const next = this.windAtNode(i + 1);
-      const nextRadius = this.lastRadiusKm;
-      const core = CORE_RADII * table.radiusMaxWindKm[i] * this.paths.size[this.base + i];
-      if (hereRadius < core || nextRadius < core) {
-        for (let cut = 1; cut < CORE_CUTS; cut++) {
-          const wind = this.windBetween(i, cut / CORE_CUTS);
+      const nextRadius = this.lastRadius;
+      if (hereRadius < CORE_RADII || nextRadius < CORE_RADII) {
+        let radius = hereRadius;
+        for (let cut = 1; cut <= CORE_CUTS; cut++) {
+          const wind = cut < CORE_CUTS ? this.windBetween(i, cut / CORE_CUTS) : next;
+          const cutRadius = cut < CORE_CUTS ? this.lastRadius : nextRadius;
+          if (radius < 1 !== cutRadius < 1) {
+            // The wind is greatest just as the place crosses the radius of maximum wind.
+            const f = (cut - 1 + (1 - radius) / (cutRadius - radius)) / CORE_CUTS;
+            const cusp = this.windBetween(i, f);
+            times[n] = i + f;
+            winds[n++] = cusp;
+            if (cusp > peak) {
+              peak = cusp;
+              peakAt = i + f;
+            }
+          }
+          radius = cutRadius;
+          if (cut === CORE_CUTS) break;
           times[n] = i + cut / CORE_CUTS;
           winds[n++] = wind;
           if (wind > peak) {
@@ -145,22 +166,27 @@ export class Passage {
     this.end[index] = this.lead(fall === samples - 1 ? times[fall] : this.crossing(times[fall], winds[fall], times[fall + 1], winds[fall + 1], kt));
   }
 
-  /** Where the wind passes `kt` between two samples: two steps of false position, each with a wind of its own. */
+  /** Where the wind passes `kt` between two samples: false position in the Illinois form (Dowell and Jarratt, 1971, BIT 11, 168-174). */
   private crossing(t0: number, w0: number, t1: number, w1: number, kt: number): number {
-    for (let step = 0; step < 2; step++) {
-      const t = t0 + ((kt - w0) / (w1 - w0)) * (t1 - t0);
-      const node = Math.min(Math.floor(t0), this.paths.nodes - 2);
-      const w = this.windBetween(node, t - node);
-      if (w >= kt === w1 >= kt) {
+    const node = Math.min(Math.floor(t0), this.paths.nodes - 2);
+    let d0 = w0 - kt;
+    let d1 = w1 - kt;
+    let t = t0;
+    for (let step = 0; step < MOST_STEPS; step++) {
+      t = t0 - (d0 * (t1 - t0)) / (d1 - d0);
+      const d = this.windBetween(node, t - node) - kt;
+      if (d < CLOSE_KT && d > -CLOSE_KT) return t;
+      if (d > 0 === d1 > 0) {
         t1 = t;
-        w1 = w;
+        d1 = d;
+        d0 *= 0.5;
       } else {
         t0 = t;
-        w0 = w;
+        d0 = d;
+        d1 *= 0.5;
       }
-      if (w1 === w0) return t1;
     }
-    return t0 + ((kt - w0) / (w1 - w0)) * (t1 - t0);
+    return t;
   }
 
   /** Lead hours at a time counted in nodes. */
@@ -171,16 +197,16 @@ export class Passage {
   }
 
   private windAtNode(i: number): number {
-    const { frame, ratio, size } = this.paths;
+    const { frame, ratio, scaleKm } = this.paths;
     const at = this.base + i;
     const o = at * FRAME;
     const east = this.px * frame[o + 3] + this.py * frame[o + 4];
     const north = this.px * frame[o + 5] + this.py * frame[o + 6] + this.pz * frame[o + 7];
-    return ratio[at] * this.lookUp(i * QUADRANTS * BINS, east, north, size[at]);
+    return ratio[at] * this.lookUp(i * QUADRANTS * BINS, east, north, scaleKm[at]);
   }
 
   private windBetween(i: number, f: number): number {
-    const { frame, ratio, size } = this.paths;
+    const { frame, ratio, scaleKm } = this.paths;
     const at = this.base + i;
     const o = at * FRAME;
     const p = o + FRAME;
@@ -190,10 +216,10 @@ export class Passage {
     const north1 = this.px * frame[p + 5] + this.py * frame[p + 6] + this.pz * frame[p + 7];
     const east = east0 + f * (east1 - east0);
     const north = north0 + f * (north1 - north0);
-    const s = size[at] + f * (size[at + 1] - size[at]);
+    const scale = scaleKm[at] + f * (scaleKm[at + 1] - scaleKm[at]);
     const row = i * QUADRANTS * BINS;
-    const wind0 = this.lookUp(row, east, north, s);
-    const wind1 = this.lookUp(row + QUADRANTS * BINS, east, north, s);
+    const wind0 = this.lookUp(row, east, north, scale);
+    const wind1 = this.lookUp(row + QUADRANTS * BINS, east, north, scale);
     return (ratio[at] + f * (ratio[at + 1] - ratio[at])) * (wind0 + f * (wind1 - wind0));
   }
 
@@ -202,12 +228,12 @@ export class Passage {
    * frame, so that their length is the sine of the angular distance and their direction the azimuth. Neighbouring quadrants are
    * blended with squared-cosine weights, exact at NE, SE, SW and NW.
    */
-  private lookUp(row: number, east: number, north: number, size: number): number {
+  private lookUp(row: number, east: number, north: number, scaleKm: number): number {
     const sin2 = east * east + north * north;
     const sin = Math.sqrt(sin2);
-    const radiusKm = EARTH_RADIUS_KM * sin * (1 + sin2 * (1 / 6 + sin2 * 0.075));
-    this.lastRadiusKm = radiusKm;
-    const position = Math.sqrt(radiusKm / size) * BINS_PER_ROOT_KM;
+    const radius = (EARTH_RADIUS_KM * sin * (1 + sin2 * (1 / 6 + sin2 * 0.075))) / scaleKm;
+    this.lastRadius = radius;
+    const position = Math.sqrt(radius) * BINS_PER_ROOT;
     if (position >= BINS - 2) return 0;
     const bin = position | 0;
     const f = position - bin;

@@ -1,5 +1,5 @@
 import type { Members } from '../members';
-import { BINS, binRadiusKm } from './stormTable';
+import { BINS, binRadius } from './stormTable';
 import type { StormTable } from './stormTable';
 
 /** Numbers kept for each node of a path: the centre's unit vector, and the unit vectors to its east (two, the third is 0) and north. */
@@ -7,7 +7,8 @@ export const FRAME = 8;
 
 /**
  * Storm paths ready for the kernel, `[path][node]`. A path is the tabulated storm moved to another centre, its wind multiplied by
- * `ratio` and its radii by `size`. `reachKm` is where its wind falls below the limit it was made for.
+ * `ratio` and its radius of maximum wind set to `scaleKm`, all other radii in proportion. `reachKm` is where its wind falls below
+ * the limit it was made for.
  */
 export interface Paths {
   count: number;
@@ -15,7 +16,7 @@ export interface Paths {
   limitKt: number;
   frame: Float64Array;
   ratio: Float32Array;
-  size: Float32Array;
+  scaleKm: Float32Array;
   reachKm: Float32Array;
 }
 
@@ -28,7 +29,7 @@ function emptyPaths(count: number, nodes: number, limitKt: number, allocate: (by
     limitKt,
     frame: new Float64Array(allocate(count * nodes * FRAME * 8)),
     ratio: new Float32Array(allocate(count * nodes * 4)),
-    size: new Float32Array(allocate(count * nodes * 4)),
+    scaleKm: new Float32Array(allocate(count * nodes * 4)),
     reachKm: new Float32Array(allocate(count * nodes * 4)),
   };
 }
@@ -49,14 +50,15 @@ function setNode(paths: Paths, table: StormTable, node: number, at: number, lat:
   frame[o + 6] = -sinLat * sinLon;
   frame[o + 7] = cosLat;
   paths.ratio[at] = ratio;
-  paths.size[at] = size;
-  paths.reachKm[at] = ratio > 0 ? envelopeReachKm(table, node, paths.limitKt / ratio) * size : 0;
+  const scaleKm = size * table.radiusMaxWindKm[node];
+  paths.scaleKm[at] = scaleKm;
+  paths.reachKm[at] = ratio > 0 ? envelopeReach(table, node, paths.limitKt / ratio) * scaleKm : 0;
 }
 
-/** Greatest radius at which the envelope of a node still holds `limitKt`; 0 when it nowhere does. */
-function envelopeReachKm(table: StormTable, node: number, limitKt: number): number {
+/** Greatest radius (in radii of maximum wind) at which a node's storm still has `limitKt` somewhere; 0 when it nowhere does. */
+function envelopeReach(table: StormTable, node: number, limitKt: number): number {
   const row = node * BINS;
-  for (let bin = BINS - 1; bin >= 0; bin--) if (table.envelopeKt[row + bin] >= limitKt) return binRadiusKm(bin + 1);
+  for (let bin = BINS - 1; bin >= 0; bin--) if (table.envelopeKt[row + bin] >= limitKt) return binRadius(bin + 1);
   return 0;
 }
 

@@ -2,15 +2,16 @@ import { profileKt, quadrantProfiles } from '../wind';
 import { stormAt } from '../track';
 import type { Track } from '../track';
 
-/** Bins are even in the square root of the radius: 0.9 km apart at 20 km, 4 km apart at 400 km. */
-export const BINS_PER_ROOT_KM = 10;
-export const BINS = 352;
-/** Radius of the outermost bin, km; beyond it the wind is taken as zero. */
-export const TABLE_RADIUS_KM = ((BINS - 2) / BINS_PER_ROOT_KM) ** 2;
+/**
+ * Bins are even in the square root of the radius, and radius is counted in radii of maximum wind: the cusp of the profile falls
+ * on a bin, whatever the storm's size. At 48 bins a root the outermost bin lies at 113 radii.
+ */
+export const BINS_PER_ROOT = 48;
+export const BINS = 512;
 export const QUADRANTS = 4;
 
-/** Kilometres at each bin. */
-export const binRadiusKm = (bin: number): number => (bin / BINS_PER_ROOT_KM) ** 2;
+/** Radius at a bin, in radii of maximum wind. */
+export const binRadius = (bin: number): number => (bin / BINS_PER_ROOT) ** 2;
 
 /**
  * The forecast storm at a row of times: 1-minute 10 m marine wind (kt) by quadrant (NE SE SW NW) and radius, laid out
@@ -55,7 +56,7 @@ export function tabulateStorm(track: Track, leadHours: Float64Array): StormTable
       const row = (i * QUADRANTS + q) * BINS;
       // The two outermost bins stay zero, so that a lookup at the edge needs no test.
       for (let bin = 0; bin < BINS - 2; bin++) {
-        const windKt = profileKt(profiles, q, binRadiusKm(bin));
+        const windKt = profileKt(profiles, q, binRadius(bin) * storm.radiusMaxWindKm);
         table.windKt[row + bin] = windKt;
         if (windKt > table.envelopeKt[i * BINS + bin]) table.envelopeKt[i * BINS + bin] = windKt;
       }
