@@ -125,7 +125,7 @@ function skipBlank(text: string, at: number): number {
 }
 
 function expectedValue(text: string, at: number): string {
-  if (/^-?(NaN|Infinity)/.test(text.slice(at, at + 10))) return 'JSON has no NaN or Infinity: leave the field out where the number is not known';
+  if (/^-?(NaN|Infinity)/.test(text.slice(at, at + 10))) return 'expected a number, and JSON has no NaN or Infinity: leave the field out where it is not known';
   if (text[at] === '"') return 'expected text that ends with a double quote on the same line';
   return 'expected a value';
 }

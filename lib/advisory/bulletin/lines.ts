@@ -8,6 +8,8 @@ export interface Line {
 /** Longer than any line of a bulletin; more is not searched, so that no line can cost more than its length. */
 const LONGEST_LINE = 240;
 const BREAK = '\v';
+/** Parts of a page that are not its text. */
+const UNSEEN = [['<!--', '-->'], ['<script', '</script'], ['<style', '</style'], ['<title', '</title']] as const;
 const NAMED: Record<string, string> = { amp: '&', lt: '<', gt: '>', quot: '"', apos: "'", nbsp: ' ' };
 
 /** The lines of a bulletin that are not blank, plain or taken out of a web page. Nothing of the page is run. */
@@ -37,7 +39,7 @@ const looksLikeHtml = (text: string): boolean => /<(?:!doctype|html|body|head|pr
 
 /** Blanks out every tag, keeping each character where it stood; breaking tags become break marks. */
 function withoutTags(text: string): string {
-  const body = withoutElement(withoutElement(withoutElement(text, '<!--', '-->'), '<script', '</script'), '<style', '</style');
+  const body = UNSEEN.reduce((rest, [open, close]) => withoutElement(rest, open, close), text);
   return body.replace(/<[^<>]*>/g, (tag) => {
     const blank = tag.replace(/[^\r\n]/g, ' ');
     return /^<\/?(?:br|p|div|tr|li|pre|h[1-6])\b/i.test(tag) ? BREAK + blank.slice(1) : blank;
@@ -52,7 +54,8 @@ function withoutElement(text: string, open: string, close: string): string {
     const start = lower.indexOf(open, from);
     if (start < 0) return out + text.slice(from);
     const found = lower.indexOf(close, start);
-    const end = found < 0 ? text.length : found + close.length;
+    const closed = found < 0 ? -1 : lower.indexOf('>', found);
+    const end = closed < 0 ? text.length : closed + 1;
     out += text.slice(from, start) + text.slice(start, end).replace(/[^\r\n]/g, ' ');
     from = end;
   }

@@ -10,6 +10,9 @@ const MONTH_DAY_YEAR = `(?:(SUN|MON|TUE|WED|THU|FRI|SAT)[A-Z]*\\s+)?(${MONTHS.jo
 const UTC_HEADER = new RegExp(`^(\\d{3,4})\\s*(?:Z|UTC|GMT)\\s+${MONTH_DAY_YEAR}`, 'i');
 const LOCAL_HEADER = new RegExp(`^(\\d{1,2}?)(\\d{2})?\\s*(AM|PM)\\s+([A-Z]{3,4})\\s+${MONTH_DAY_YEAR}`, 'i');
 
+/** Longer than any forecast reaches, shorter than half of any two months. */
+const HALF_MONTH_MS = 16 * 24 * 3_600_000;
+
 export interface IssueTime {
   ms: number;
   /** The weekday written, where it is not the date's. */
@@ -40,15 +43,18 @@ function dated(hour: number, minute: number, hoursToUtc: number, [weekday, month
 
 /**
  * The instant of `dd/hhmmZ`: the day of that number nearest to the issue time, so that months and years
- * roll over by themselves. Null where no month near has that day, or the hour is none.
+ * roll over by themselves. Null where no such day is within half a month, or the hour is none.
  */
 export function dayTimeNear(day: number, hhmm: string, issuedMs: number): number | null {
   const issued = new Date(issuedMs);
   let best: number | null = null;
+  let bestGap = HALF_MONTH_MS;
   for (const shift of [-1, 0, 1]) {
     const month = new Date(Date.UTC(issued.getUTCFullYear(), issued.getUTCMonth() + shift, 1));
     const ms = utcMs(month.getUTCFullYear(), month.getUTCMonth() + 1, day, Number(hhmm.slice(0, 2)), Number(hhmm.slice(2)));
-    if (ms !== null && (best === null || Math.abs(ms - issuedMs) < Math.abs(best - issuedMs))) best = ms;
+    if (ms === null || Math.abs(ms - issuedMs) > bestGap) continue;
+    best = ms;
+    bestGap = Math.abs(ms - issuedMs);
   }
   return best;
 }
