@@ -1,11 +1,12 @@
 import type { Feature, FeatureCollection } from 'geojson';
+import { SURFACES } from '../units';
+import type { Surface } from '../units';
 
 export const LAYER_KINDS = ['zones', 'assets', 'population'] as const;
 export type LayerKind = (typeof LAYER_KINDS)[number];
 
-/** What the ground at a place does to the wind. */
-export const SURFACES = ['marine', 'open', 'built-up'] as const;
-export type Surface = (typeof SURFACES)[number];
+export { SURFACES };
+export type { Surface };
 
 /** An evacuation zone: a polygon, the people it holds when no population layer says so, and the hours it takes to clear. */
 export interface Zone {

@@ -3,7 +3,7 @@ export { pressureFromWindHpa, windFromPressureKt } from './atkinsonHolliday1977'
 export { climatologicalVortex, climatologyRadiiKm, motionAsymmetryKt, QUADRANT_AZIMUTHS_DEG, strongSideDeg } from './climatologyRadii';
 export type { Inferred, Knot } from './knots';
 export { hermite, monotoneSlopes } from './monotoneCubic';
-export { willoughbyRadiusMaxWindKm } from './radiusMaxWind';
+export { chavasKnaffRadiusMaxWindKm, willoughbyRadiusMaxWindKm } from './radiusMaxWind';
 export { stormAt } from './stormAt';
 export type { Ring, StormState } from './stormAt';
 export { centreAt, makeTrack } from './track';

@@ -1,12 +1,12 @@
 import type { Point, Stage } from '../advisory';
-import { THRESHOLDS_KT, byThreshold, nmiToKm, ktToMs } from '../units';
-import type { ByThreshold, ThresholdKey } from '../units';
+import { byThreshold, ktToMs, nmiToKm, THRESHOLD_KEYS, THRESHOLDS_KT } from '../units';
+import type { ByThreshold } from '../units';
 import type { QuadrantKm } from '../geo';
 import { pressureFromWindHpa } from './atkinsonHolliday1977';
 import { fading } from './fading';
 import { fillRadii } from './fillRadii';
 import type { Motion } from './motion';
-import { willoughbyRadiusMaxWindKm } from './radiusMaxWind';
+import { chavasKnaffRadiusMaxWindKm, willoughbyRadiusMaxWindKm } from './radiusMaxWind';
 
 /** What was not in the advisory and comes from a published regression or climatology. */
 export interface Inferred {
@@ -29,6 +29,10 @@ export interface Knot {
   inferred: Inferred;
 }
 
+/** Surface wind over the wind at flight level near the maximum: Powell, Uhlhorn and Kepert (2009), Wea. Forecasting 24, 868-883. */
+const SURFACE_OVER_FLIGHT = 0.9;
+/** Mean radius within a quadrant over the greatest, which is what advisories give: Chavas and Knaff (2022), after DeMaria et al. (2009). */
+const MEAN_OVER_GREATEST = 0.85;
 /** A ring lies outside the radius of maximum wind. */
 const INSIDE_RING = 0.95;
 /** The maximum lies in the eyewall, this far outside the eye's edge: Shea and Gray (1973), J. Atmos. Sci. 30, 1544-1564 (about 5 nmi; from memory). */
@@ -40,16 +44,22 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
   const radii = fillRadii(points, leadHours, motion, winds, oneMinute);
   const pressures = fading(points.map((point) => point.minPressureHpa ?? null), winds.map(pressureFromWindHpa), leadHours);
   // Radii of maximum wind fade as ratios, pressures as differences.
-  const climatology = points.map((point, i) => Math.log(willoughbyRadiusMaxWindKm(ktToMs(winds[i]), point.lat)));
+  const climatology = points.map((point, i) => Math.log(expectedRadiusMaxWindKm(winds[i], point.lat, radii.km?.[i]['34'] ?? null)));
   const radiiMaxWind = fading(points.map((point) => logOf(givenRadiusMaxWindKm(point))), climatology, leadHours);
+  const rings = radii.km;
+  const radiusMaxWindKm = radiiMaxWind.map((log, i) => {
+    const inferred = points[i].radiusMaxWindNm === undefined;
+    if (rings === null) return Math.exp(log);
+    return Math.min(Math.exp(log), insideOwnRings(rings[i], winds[i], oneMinute, inferred), inferred ? insideVanishingRings(rings, winds, i, oneMinute) : Infinity);
+  });
   return points.map((point, i) => ({
     leadHours: leadHours[i],
     lat: point.lat,
     lon: point.lon,
     maxWindKt: winds[i],
     minPressureHpa: pressures[i],
-    radiusMaxWindKm: withinRings(Math.exp(radiiMaxWind[i]), winds[i], radii.km?.[i] ?? null, oneMinute, point.radiusMaxWindNm === undefined),
-    radiiKm: radii.km?.[i] ?? null,
+    radiusMaxWindKm: radiusMaxWindKm[i],
+    radiiKm: rings?.[i] ?? null,
     stage: point.stage ?? (point.maxWindKt < THRESHOLDS_KT[0] ? 'depression' : 'tropical'),
     inferred: {
       radiusMaxWind: point.radiusMaxWindNm === undefined,
@@ -57,6 +67,14 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
       radii: byThreshold((t) => !radii.given[t][i]),
     },
   }));
+}
+
+/** Radius of maximum wind to expect: from the 34 kt radii where there are any, else from strength and latitude alone. */
+function expectedRadiusMaxWindKm(maxWindKt: number, lat: number, radii34Km: QuadrantKm | null): number {
+  const reached = radii34Km?.filter((km) => km > 0) ?? [];
+  if (reached.length === 0) return willoughbyRadiusMaxWindKm(ktToMs(maxWindKt) / SURFACE_OVER_FLIGHT, lat);
+  const meanKm = reached.reduce((sum, km) => sum + km, 0) / reached.length;
+  return chavasKnaffRadiusMaxWindKm(maxWindKt, MEAN_OVER_GREATEST * meanKm, lat);
 }
 
 function givenRadiusMaxWindKm(point: Point): number | null {
@@ -67,16 +85,15 @@ function givenRadiusMaxWindKm(point: Point): number | null {
 const logOf = (value: number | null): number | null => (value === null ? null : Math.log(value));
 
 /**
- * The radius of maximum wind made to agree with the radii: inside every quadrant's innermost ring; and where it is inferred, no
- * farther in proportion than angular momentum allows, which does not fall outward (`V r` at the widest innermost ring is at
- * least `V r` at the maximum).
+ * The most that the radius of maximum wind (km) can be beside a point's rings: inside every quadrant's innermost ring; and where it
+ * is inferred, no farther in proportion than angular momentum allows, which does not fall outward (`V r` at the widest innermost
+ * ring is at least `V r` at the maximum).
  */
-function withinRings(radiusKm: number, maxWindKt: number, radiiKm: ByThreshold<QuadrantKm> | null, oneMinute: number, inferred: boolean): number {
-  if (radiiKm === null) return radiusKm;
+function insideOwnRings(radiiKm: ByThreshold<QuadrantKm>, maxWindKt: number, oneMinute: number, inferred: boolean): number {
   let most = Infinity;
-  let innermostFound = false;
   const open = [true, true, true, true];
-  for (const key of ['64', '50', '34'] as const satisfies ThresholdKey[]) {
+  let innermost = true;
+  for (const key of ['64', '50', '34'] as const) {
     const ring = radiiKm[key];
     ring.forEach((km, q) => {
       if (km === 0 || !open[q]) return;
@@ -84,10 +101,22 @@ function withinRings(radiusKm: number, maxWindKt: number, radiiKm: ByThreshold<Q
       most = Math.min(most, INSIDE_RING * km);
     });
     const widest = Math.max(...ring);
-    if (widest > 0 && !innermostFound) {
-      innermostFound = true;
-      if (inferred) most = Math.min(most, (widest * Number(key) * oneMinute) / maxWindKt);
-    }
+    if (widest > 0 && innermost && inferred) most = Math.min(most, (widest * Number(key) * oneMinute) / maxWindKt);
+    innermost &&= widest === 0;
   }
-  return Math.min(radiusKm, most);
+  return most;
+}
+
+/** A ring that the next or the last point holds and this one does not draws in to this one's maximum: it must not grow on the way. */
+function insideVanishingRings(rings: ByThreshold<QuadrantKm>[], windsKt: number[], i: number, oneMinute: number): number {
+  let most = Infinity;
+  THRESHOLDS_KT.forEach((kt, t) => {
+    if (windsKt[i] >= kt * oneMinute) return;
+    for (const ring of [rings[i - 1]?.[THRESHOLD_KEYS[t]], rings[i + 1]?.[THRESHOLD_KEYS[t]]]) {
+      ring?.forEach((km) => {
+        if (km > 0) most = Math.min(most, INSIDE_RING * km);
+      });
+    }
+  });
+  return most;
 }

@@ -3,6 +3,8 @@ import type { Vector } from '../geo';
 import { harmonicSlope, hermite, hermiteSlope } from './monotoneCubic';
 
 const NONE: Vector = [0, 0, 0];
+/** Speed at a point over the slower of the legs it joins, at most: holds the departure sideways under a third of a leg. */
+const FASTEST = 1.5;
 
 /** One leg of a path: the great circle from a knot to the next, and how the path enters and leaves it. */
 interface Leg {
@@ -30,9 +32,8 @@ export interface Path {
 /**
  * A path through every place, with continuous velocity. In each leg's own great-circle frame, progress along the great circle is
  * a monotone cubic (Fritsch and Carlson, 1980), so the storm never turns back between points, and the departure sideways is a
- * cubic that is zero at both ends. The velocity at a point is the weighted harmonic mean of the speeds before and after (Fritsch
- * and Butland, 1984) along the mean of both directions: zero where the storm stands still or turns right round. Nothing refers to
- * the poles or a meridian, so the path turns with the sphere.
+ * cubic that is zero at both ends. The velocity at a point lies between the directions before and after, at the weighted harmonic
+ * mean of their speeds (Fritsch and Butland, 1984). Nothing refers to the poles or a meridian, so the path turns with the sphere.
  */
 export function makePath(leadHours: Float64Array, lat: ArrayLike<number>, lon: ArrayLike<number>): Path {
   const places = Array.from(leadHours, (_, i) => unitVector(lat[i], lon[i]));
@@ -41,8 +42,7 @@ export function makePath(leadHours: Float64Array, lat: ArrayLike<number>, lon: A
   for (let i = 1; i < legs.length; i++) {
     const [before, after] = [legs[i - 1], legs[i]];
     const arriving = add(scale(before.along, Math.cos(before.angle)), scale(before.start, -Math.sin(before.angle)));
-    const speed = harmonicSlope(before.angle / before.hours, after.angle / after.hours, before.hours, after.hours);
-    const velocity = scale(add(arriving, after.along), speed / 2);
+    const velocity = velocityAt(arriving, after.along, before, after);
     before.alongEnd = dot(velocity, arriving);
     before.leftEnd = dot(velocity, before.left);
     after.alongStart = dot(velocity, after.along);
@@ -59,6 +59,19 @@ export function makePath(leadHours: Float64Array, lat: ArrayLike<number>, lon: A
     last.leftEnd = -last.leftStart / 2;
   }
   return { leadHours, legs, start: places[0] };
+}
+
+/**
+ * Velocity where two legs meet: along the middle of both directions (unit vectors), at the weighted harmonic mean of both speeds.
+ * Beyond a right angle the turn slows the storm, until it stands still where it turns right round.
+ */
+function velocityAt(arriving: Vector, leaving: Vector, before: Leg, after: Leg): Vector {
+  const [speedBefore, speedAfter] = [before.angle / before.hours, after.angle / after.hours];
+  const middle = add(arriving, leaving);
+  const size = length(middle);
+  if (size < 1e-9) return NONE;
+  const speed = Math.min(harmonicSlope(speedBefore, speedAfter, before.hours, after.hours), FASTEST * Math.min(speedBefore, speedAfter));
+  return scale(middle, (speed * Math.min(1, (size * size) / 2)) / size);
 }
 
 function bareLeg(from: Vector, to: Vector, hours: number): Leg {

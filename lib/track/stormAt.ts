@@ -46,7 +46,7 @@ export function stormAt(track: Track, leadHours: number): StormState | null {
   const { position, velocity, heading } = pathAt(track.path, leg, fraction);
   const maxWindKt = a === b ? a.maxWindKt : hermite(fraction, hours, a.maxWindKt, b.maxWindKt, windSlopes[leg], windSlopes[leg + 1]);
   const radiusMaxWindKm = a.radiusMaxWindKm + fraction * (b.radiusMaxWindKm - a.radiusMaxWindKm);
-  const rings = ringsBetween(a, b, fraction, maxWindKt, radiusMaxWindKm, track.oneMinute);
+  const rings = ringsBetween(a, b, fraction, maxWindKt, track.oneMinute);
   return {
     leadHours,
     ...fromUnitVector(position),
@@ -79,7 +79,7 @@ const map = (ring: QuadrantKm, make: (km: number, quadrant: 0 | 1 | 2 | 3) => nu
  * under a threshold from one point to the next, its ring draws in to the radius of maximum wind and its wind falls with the
  * maximum, so that the wind field never jumps.
  */
-function ringsBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, radiusMaxWindKm: number, oneMinute: number): (Ring | null)[] | null {
+function ringsBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, oneMinute: number): (Ring | null)[] | null {
   const [from, to] = [a.radiiKm, b.radiiKm];
   if (!from || !to) return null;
   return THRESHOLDS_KT.map((kt, t) => {
@@ -87,10 +87,11 @@ function ringsBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, rad
     const thresholdKt = kt * oneMinute;
     const [holdsA, holdsB] = [a.maxWindKt >= thresholdKt, b.maxWindKt >= thresholdKt];
     if (!holdsA && !holdsB) return null;
-    const end = (knotHolds: boolean, own: number, other: number): number => (knotHolds ? own : other > 0 ? radiusMaxWindKm : 0);
-    const radiiKm = map(from[key], (km, q) => {
-      const start = end(holdsA, km, to[key][q]);
-      return start + fraction * (end(holdsB, to[key][q], km) - start);
+    const radiiKm = map(from[key], (kmA, q) => {
+      const kmB = to[key][q];
+      const start = holdsA || kmB === 0 ? kmA : a.radiusMaxWindKm;
+      const end = holdsB || kmA === 0 ? kmB : b.radiusMaxWindKm;
+      return start + fraction * (end - start);
     });
     return { windKt: Math.min(thresholdKt, maxWindKt), radiiKm };
   });

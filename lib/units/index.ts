@@ -3,4 +3,5 @@ export * from './averaging';
 export * from './convert';
 export * from './format';
 export * from './formatTime';
+export * from './surfaces';
 export * from './thresholds';

@@ -19,3 +19,13 @@ export function inlandWindKt(landfallKt: number, hours: number): number {
  */
 export const decayedOverLandKt = (windKt: number, hours: number): number =>
   windKt <= BACKGROUND_KT ? windKt : BACKGROUND_KT + (windKt - BACKGROUND_KT) * Math.exp(-DECAY_PER_HOUR * Math.max(0, hours));
+
+/**
+ * Correction (kt) to subtract for the distance of the centre from the coast (km, at least 1): `m ln(D / D0) + b`,
+ * `m = 0.0109 t (50 - t)`, `b = -0.0503 t (50 - t)`, D0 = 1 km, for the first 50 hours after landfall (coefficients from memory). A storm that
+ * hugs the coast keeps more of its wind than one far inland.
+ */
+export function inlandCorrectionKt(hours: number, coastDistanceKm: number): number {
+  const t = Math.min(Math.max(hours, 0), 50);
+  return t * (50 - t) * (0.0109 * Math.log(Math.max(coastDistanceKm, 1)) - 0.0503);
+}

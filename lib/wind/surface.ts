@@ -1,6 +1,4 @@
-/** What the ground at a place does to the wind: water and its edge, open land, built-up land. */
-export const WIND_SURFACES = ['marine', 'open', 'built-up'] as const;
-export type WindSurface = (typeof WIND_SURFACES)[number];
+import type { Surface } from '../units';
 
 /**
  * Sustained wind at 10 m over a surface, over that over water.
@@ -9,12 +7,12 @@ export type WindSurface = (typeof WIND_SURFACES)[number];
  * that times 0.85, the square root of the velocity pressure coefficients at 10 m of exposure B over exposure C, 0.72 / 1.00
  * (ASCE 7, table of Kz; from memory).
  */
-const FACTORS: Record<WindSurface, number> = { marine: 1, open: 0.8, 'built-up': 0.68 };
+const FACTORS: Record<Surface, number> = { marine: 1, open: 0.8, 'built-up': 0.68 };
 
-export const surfaceFactor = (surface: WindSurface): number => FACTORS[surface];
+export const surfaceFactor = (surface: Surface): number => FACTORS[surface];
 
 /** Inland of a shore the wind still blows as over water for 600 ft (ASCE 7, exposure D; from memory). */
 const SHORE_KM = 0.183;
 
 /** The surface of a place of which only the distance to the coast is known (km, positive inland). */
-export const surfaceOf = (coastDistanceKm: number): WindSurface => (coastDistanceKm > SHORE_KM ? 'open' : 'marine');
+export const surfaceOf = (coastDistanceKm: number): Surface => (coastDistanceKm > SHORE_KM ? 'open' : 'marine');
