@@ -1,0 +1,1 @@
+export { ForecastsPage as default } from '../../../forecasts/ForecastsPage';

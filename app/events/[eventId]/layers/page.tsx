@@ -1,0 +1,1 @@
+export { LayersPage as default } from '../../../layers/LayersPage';

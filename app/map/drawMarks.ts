@@ -1,0 +1,49 @@
+import { IconLayer, ScatterplotLayer } from '@deck.gl/layers';
+import type { Layer } from '@deck.gl/core';
+import type { Marks } from '../http/api';
+import type { GlyphAtlas } from './glyphAtlas';
+import { markClasses, markColumns, marksWhere } from './marks';
+import type { MarkColumns } from './marks';
+import type { Palette, Rgba } from './palette';
+import { withAlpha } from './palette';
+
+export interface DrawnMarks {
+  dots: MarkColumns;
+  glyphs: { index: number; glyph: string; position: [number, number]; colour: Rgba }[];
+}
+
+/** Columns and icons for the classes that are shown. */
+export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, palette: Palette): DrawnMarks {
+  const classes = new Map(markClasses(marks).map((one) => [one.name, one]));
+  const shown = (name: string): boolean => !hidden.has(name);
+  const dots = markColumns(marks, marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph === 'dot'), palette);
+  const chosen = marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph !== 'dot');
+  const columns = markColumns(marks, chosen, palette);
+  const glyphs = Array.from(columns.index, (index, i) => ({
+    index,
+    glyph: classes.get(marks.classes[marks.classIndex[index]])!.glyph,
+    position: [columns.positions[i * 2], columns.positions[i * 2 + 1]] as [number, number],
+    colour: Array.from(columns.colours.subarray(i * 4, i * 4 + 4)) as Rgba,
+  }));
+  return { dots, glyphs };
+}
+
+/** Dots by the ten thousand from typed arrays, shapes for what is few. `key` changes when the data does. */
+export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom: number, palette: Palette, key: string): Layer[] {
+  // Shapes grow a little as one comes nearer; dots stay below a pixel and a half until then.
+  const near = Math.max(0, Math.min(1, (zoom - 6) / 4));
+  const icon = { data: glyphs, iconAtlas: atlas.image as unknown as string, iconMapping: atlas.mapping, sizeUnits: 'pixels' as const, sizeScale: 11 + 9 * near, getPosition: (mark: DrawnMarks['glyphs'][number]) => mark.position };
+  return [
+    new ScatterplotLayer({
+      id: `dots-${key}`,
+      data: { length: dots.index.length, attributes: { getPosition: { value: dots.positions, size: 2 }, getFillColor: { value: dots.colours, size: 4 } } },
+      radiusUnits: 'pixels',
+      getRadius: 1,
+      radiusScale: 1.1 + 1.9 * near,
+      opacity: 0.75,
+      stroked: false,
+    }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.ink, 0.9) }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-${key}`, getIcon: (mark) => mark.glyph, getColor: (mark) => (mark.colour[3] < 255 ? palette.halo : mark.colour) }),
+  ];
+}

@@ -1,0 +1,48 @@
+import { useCallback, useEffect } from 'react';
+import type { StoreApi } from 'zustand/vanilla';
+import { useBulk, useLive, useView } from '../live/EventContext';
+import type { MapState } from './mapState';
+import { boundsOf, fitted, nearestTurn } from './mercator';
+import type { Bounds } from './mercator';
+
+/** The storm's centre joins the view while it is within this many degrees of what is worked on. */
+const NEAR_DEG = 5;
+const PADDING = { top: 26, right: 40, bottom: 40, left: 40 };
+
+/** Shows the zones (else the assets, else the track), with the storm when it is near; a preview shows all its points. */
+export function useFit(map: StoreApi<MapState>): () => void {
+  const zones = useBulk((state) => state.zones);
+  const marks = useBulk((state) => state.marks);
+  const advisory = useLive((state) => state.advisory);
+  const preview = useView((state) => state.preview);
+
+  const fit = useCallback(() => {
+    const { size } = map.getState();
+    if (size.width === 0) return;
+    const points = (preview ?? advisory)?.points.map((point) => [point.lon, point.lat] as const) ?? [];
+    const places = zones.length > 0 ? zones.flatMap((zone) => zone.polygons.flatMap((polygon) => polygon[0] as [number, number][])) : (marks?.lon.map((lon, i) => [lon, marks.lat[i]] as const) ?? []);
+    const bounds = preview ? boundsOf([...points, ...places.slice(0, 1)]) : (withStorm(boundsOf(places), points[0]) ?? boundsOf(points));
+    if (!bounds) return;
+    map.setState({ camera: fitted(bounds, size, PADDING, 8), moved: false });
+  }, [map, zones, marks, advisory, preview]);
+
+  useEffect(() => {
+    if (!map.getState().moved || preview) fit();
+    let before = map.getState().size;
+    return map.subscribe((now) => {
+      if (now.size !== before) {
+        before = now.size;
+        if (!now.moved) fit();
+      }
+    });
+  }, [fit, map, preview]);
+  return fit;
+}
+
+function withStorm(bounds: Bounds | null, centre: readonly [number, number] | undefined): Bounds | null {
+  if (!bounds || !centre) return bounds;
+  const lon = nearestTurn(centre[0], (bounds.west + bounds.east) / 2);
+  const near = lon > bounds.west - NEAR_DEG && lon < bounds.east + NEAR_DEG && centre[1] > bounds.south - NEAR_DEG && centre[1] < bounds.north + NEAR_DEG;
+  if (!near) return bounds;
+  return { west: Math.min(bounds.west, lon), east: Math.max(bounds.east, lon), south: Math.min(bounds.south, centre[1]), north: Math.max(bounds.north, centre[1]) };
+}

@@ -1,0 +1,4 @@
+import { en } from './en';
+
+/** The words in use. */
+export const words = en;
