@@ -35,7 +35,7 @@ export interface Blocks {
  * Cuts places, which lie along a space-filling curve, into blocks of about `size`. `owner[i]` names the thing a place belongs to;
  * places of one owner (other than -1) stay in one block.
  */
-export function makeBlocks(places: Places, owner: Int32Array | null, size = 256): Blocks {
+export function makeBlocks(places: Places, owner: Int32Array | null, size = 2048): Blocks {
   const starts = [0];
   for (let i = 1; i < places.count; i++) {
     const together = owner !== null && owner[i] >= 0 && owner[i] === owner[i - 1];

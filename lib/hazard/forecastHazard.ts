@@ -1,7 +1,7 @@
 import { THRESHOLDS_KT } from '../units';
 import { activeWindow } from './blocks';
 import type { Blocks, Places } from './blocks';
-import { Passage } from './passage';
+import { CLOSELY, Passage } from './passage';
 import { forecastPath } from './paths';
 import type { StormTable } from './stormTable';
 
@@ -21,7 +21,7 @@ export interface PlaceHazard {
 
 export function forecastHazard(table: StormTable, places: Places, blocks: Blocks): PlaceHazard {
   const paths = forecastPath(table, LIMIT_KT);
-  const passage = new Passage(table, paths);
+  const passage = new Passage(table, paths, CLOSELY);
   const hazard: PlaceHazard = {
     peakKt: new Float32Array(places.count),
     peakLead: new Float32Array(places.count).fill(NaN),
@@ -37,7 +37,8 @@ export function forecastHazard(table: StormTable, places: Places, blocks: Blocks
       const factor = places.surfaceFactor[i];
       const o = i * 3;
       const { xyz } = places;
-      if (!passage.over(0, window.first, window.last, xyz[o], xyz[o + 1], xyz[o + 2], kt34 / factor, kt50 / factor, kt64 / factor)) continue;
+      if (!passage.over(0, window.first, window.last, xyz[o], xyz[o + 1], xyz[o + 2])) continue;
+      passage.cross(kt34 / factor, kt50 / factor, kt64 / factor);
       hazard.peakKt[i] = passage.peakKt * factor;
       hazard.peakLead[i] = passage.peakLead;
       hazard.arrival.set(passage.arrival, o);

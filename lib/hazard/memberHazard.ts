@@ -1,7 +1,8 @@
-import { THRESHOLDS_KT } from '../units';
 import { activeWindow } from './blocks';
 import type { Blocks, Places } from './blocks';
-import { Passage } from './passage';
+import { makeLattice } from './lattice';
+import { LatticePassage } from './latticePassage';
+import { Passage, QUICKLY } from './passage';
 import type { Paths } from './paths';
 import { histogramQuantile, LEAST_CHANCE_FOR_TIMES, QUANTILES, TIME_BIN_HOURS } from './quantiles';
 import type { StormTable } from './stormTable';
@@ -21,6 +22,9 @@ export interface Targets {
   zoneCount: number;
   classCount: number;
 }
+
+/** Spacing of the lattice on which a member's wind is computed; places between its corners take it from there. */
+const LATTICE_KM = 4;
 
 /** Early, median and late arrival, then early, median and late end. */
 export const MOMENTS = 6;
@@ -66,11 +70,10 @@ export function memberHazard(table: StormTable, paths: Paths, targets: Targets, 
     milliPeople: new Float64Array(3 * members),
     classReached: new Uint32Array(classCount * 3 * members),
   };
-  const passage = new Passage(table, paths);
+  const passage = new Passage(table, paths, QUICKLY);
   const window = { first: 0, last: 0 };
   const assetArrival = new Float64Array(3);
   const assetEnd = new Float64Array(3);
-  const [kt34, kt50, kt64] = THRESHOLDS_KT;
   let arrivalBins = new Uint16Array(0);
   let endBins = new Uint16Array(0);
   let firstAsset = 0;
@@ -79,6 +82,7 @@ export function memberHazard(table: StormTable, paths: Paths, targets: Targets, 
     const from = blocks.start[block];
     const to = blocks.start[block + 1];
     const owned = countAssets(asset, from, to);
+    const lattice = new LatticePassage(makeLattice(places, blocks, block, LATTICE_KM), passage, places, from, to);
     if (arrivalBins.length < owned * 3 * bins) {
       arrivalBins = new Uint16Array(owned * 3 * bins);
       endBins = new Uint16Array(owned * 3 * bins);
@@ -88,7 +92,7 @@ export function memberHazard(table: StormTable, paths: Paths, targets: Targets, 
     }
     for (let m = 0; m < members; m++) {
       activeWindow(paths, m, blocks, block, window);
-      if (window.first >= window.last) continue;
+      if (window.first >= window.last || !lattice.over(m, window.first, window.last)) continue;
       let k = -1;
       for (let i = from; i < to; i++) {
         const owner = asset[i];
@@ -99,26 +103,21 @@ export function memberHazard(table: StormTable, paths: Paths, targets: Targets, 
           assetArrival.fill(Infinity);
           assetEnd.fill(-Infinity);
         }
-        const factor = places.surfaceFactor[i];
-        const o = i * 3;
-        const hit = passage.over(m, window.first, window.last, places.xyz[o], places.xyz[o + 1], places.xyz[o + 2], kt34 / factor, kt50 / factor, kt64 / factor);
-        if (hit) {
-          for (let t = 0; t < 3; t++) {
-            const arrival = passage.arrival[t];
-            // NaN: this threshold is not reached, nor any above it.
-            if (arrival !== arrival) break;
-            if (owner >= 0) {
-              if (arrival < assetArrival[t]) assetArrival[t] = arrival;
-              if (passage.end[t] > assetEnd[t]) assetEnd[t] = passage.end[t];
-              continue;
-            }
-            chunk.milliPeople[t * members + m] += milliPeople[i];
-            if (zone[i] >= 0) {
-              const z = (slotOf[zone[i]] * 3 + t) * members + m;
-              chunk.zoneMilliPeople[z] += milliPeople[i];
-              if (arrival < chunk.zoneArrival[z]) chunk.zoneArrival[z] = arrival;
-              if (passage.end[t] > chunk.zoneEnd[z]) chunk.zoneEnd[z] = passage.end[t];
-            }
+        const reached = lattice.at(i - from);
+        for (let t = 0; t < reached; t++) {
+          const arrival = lattice.arrival[t];
+          const end = lattice.end[t];
+          if (owner >= 0) {
+            if (arrival < assetArrival[t]) assetArrival[t] = arrival;
+            if (end > assetEnd[t]) assetEnd[t] = end;
+            continue;
+          }
+          chunk.milliPeople[t * members + m] += milliPeople[i];
+          if (zone[i] >= 0) {
+            const z = (slotOf[zone[i]] * 3 + t) * members + m;
+            chunk.zoneMilliPeople[z] += milliPeople[i];
+            if (arrival < chunk.zoneArrival[z]) chunk.zoneArrival[z] = arrival;
+            if (end > chunk.zoneEnd[z]) chunk.zoneEnd[z] = end;
           }
         }
         if (closes) {

@@ -4,16 +4,23 @@ import type { Paths } from './paths';
 import { BINS, BINS_PER_ROOT, QUADRANTS } from './stormTable';
 import type { StormTable } from './stormTable';
 
-/** Intervals that touch the core are cut this many times: across the eye the wind rises, falls and rises within the hour. */
-const CORE_CUTS = 6;
 /** The core, in radii of maximum wind. */
 const CORE_RADII = 2;
-/** Samples an interval can ask for: its cuts, and a crossing of the radius of maximum wind in each. */
-const MOST_SAMPLES = 2 * CORE_CUTS + 1;
 
-/** A crossing is found when the wind there is this close to the threshold, or after so many steps. */
-const CLOSE_KT = 0.01;
-const MOST_STEPS = 8;
+/** How closely a passage is looked at. */
+export interface Care {
+  /** Intervals that touch the core are cut this many times: across the eye the wind rises, falls and rises within the hour. */
+  coreCuts: number;
+  /** A crossing is found when the wind there is this close to the threshold (kt), or after so many steps. */
+  closeKt: number;
+  mostSteps: number;
+}
+
+/** For the forecast: every place, once. */
+export const CLOSELY: Care = { coreCuts: 6, closeKt: 0.01, mostSteps: 8 };
+/** For one of a thousand members. */
+export const QUICKLY: Care = { coreCuts: 4, closeKt: 0.25, mostSteps: 3 };
+
 
 const NE = 0;
 const SE = BINS;
@@ -35,8 +42,10 @@ export class Passage {
 
   private readonly table: StormTable;
   private readonly paths: Paths;
+  private readonly care: Care;
   private readonly times: Float64Array;
   private readonly winds: Float64Array;
+  private samples = 0;
   private base = 0;
   private px = 0;
   private py = 0;
@@ -44,33 +53,40 @@ export class Passage {
   /** Distance at the last look-up, in radii of maximum wind. */
   private lastRadius = 0;
 
-  constructor(table: StormTable, paths: Paths) {
+  constructor(table: StormTable, paths: Paths, care: Care) {
     this.table = table;
     this.paths = paths;
-    this.times = new Float64Array(paths.nodes * MOST_SAMPLES);
-    this.winds = new Float64Array(paths.nodes * MOST_SAMPLES);
+    this.care = care;
+    // An interval asks for its end, its cuts and a crossing of the radius of maximum wind in each.
+    const samples = paths.nodes * (2 * care.coreCuts + 1);
+    this.times = new Float64Array(samples);
+    this.winds = new Float64Array(samples);
   }
 
   /**
-   * Path `path` past the place with unit vector (x, y, z), nodes `first` to `last`, against three rising thresholds (kt, marine).
-   * Returns false, leaving the fields as they were, when the wind stays under the paths' limit.
+   * Path `path` past the place with unit vector (x, y, z), nodes `first` to `last`: sets the peak, and is ready to be asked for
+   * crossings. Returns false when the wind stays under the paths' limit.
    */
-  over(path: number, first: number, last: number, x: number, y: number, z: number, kt34: number, kt50: number, kt64: number): boolean {
+  over(path: number, first: number, last: number, x: number, y: number, z: number): boolean {
     this.base = path * this.paths.nodes;
     this.px = x;
     this.py = y;
     this.pz = z;
-    const samples = this.sample(first, last);
-    if (samples === 0) return false;
-    this.cross(0, kt34, samples);
-    this.cross(1, kt50, samples);
-    this.cross(2, kt64, samples);
-    return true;
+    this.samples = this.sample(first, last);
+    return this.peakKt >= this.paths.limitKt;
   }
 
-  /** Fills times (in nodes) and winds; returns how many, 0 when all winds are under the limit. Sets the peak. */
+  /** First and last time at or above three rising thresholds (kt over water) in the passage last looked at. */
+  cross(kt34: number, kt50: number, kt64: number): void {
+    this.crossOne(0, kt34);
+    this.crossOne(1, kt50);
+    this.crossOne(2, kt64);
+  }
+
+  /** Fills times (in nodes) and winds; returns how many. Sets the peak. */
   private sample(first: number, last: number): number {
     const { times, winds } = this;
+    const { coreCuts } = this.care;
     let n = 0;
     let peak = 0;
     let peakAt = NaN;
@@ -88,12 +104,12 @@ export class Passage {
       const nextRadius = this.lastRadius;
       if (hereRadius < CORE_RADII || nextRadius < CORE_RADII) {
         let radius = hereRadius;
-        for (let cut = 1; cut <= CORE_CUTS; cut++) {
-          const wind = cut < CORE_CUTS ? this.windBetween(i, cut / CORE_CUTS) : next;
-          const cutRadius = cut < CORE_CUTS ? this.lastRadius : nextRadius;
+        for (let cut = 1; cut <= coreCuts; cut++) {
+          const wind = cut < coreCuts ? this.windBetween(i, cut / coreCuts) : next;
+          const cutRadius = cut < coreCuts ? this.lastRadius : nextRadius;
           if (radius < 1 !== cutRadius < 1) {
             // The wind is greatest just as the place crosses the radius of maximum wind.
-            const f = (cut - 1 + (1 - radius) / (cutRadius - radius)) / CORE_CUTS;
+            const f = (cut - 1 + (1 - radius) / (cutRadius - radius)) / coreCuts;
             const cusp = this.windBetween(i, f);
             times[n] = i + f;
             winds[n++] = cusp;
@@ -103,8 +119,8 @@ export class Passage {
             }
           }
           radius = cutRadius;
-          if (cut === CORE_CUTS) break;
-          times[n] = i + cut / CORE_CUTS;
+          if (cut === coreCuts) break;
+          times[n] = i + cut / coreCuts;
           winds[n++] = wind;
           if (wind > peak) {
             peak = wind;
@@ -144,15 +160,13 @@ export class Passage {
       here = next;
       hereRadius = nextRadius;
     }
-    if (peak < this.paths.limitKt) return 0;
     this.peakKt = peak;
     this.peakLead = this.lead(peakAt);
     return n;
   }
 
-  /** First and last time at or above a threshold. */
-  private cross(index: 0 | 1 | 2, kt: number, samples: number): void {
-    const { times, winds } = this;
+  private crossOne(index: 0 | 1 | 2, kt: number): void {
+    const { times, winds, samples } = this;
     if (this.peakKt < kt) {
       this.arrival[index] = NaN;
       this.end[index] = NaN;
@@ -172,10 +186,11 @@ export class Passage {
     let d0 = w0 - kt;
     let d1 = w1 - kt;
     let t = t0;
-    for (let step = 0; step < MOST_STEPS; step++) {
+    const { closeKt, mostSteps } = this.care;
+    for (let step = 0; step < mostSteps; step++) {
       t = t0 - (d0 * (t1 - t0)) / (d1 - d0);
       const d = this.windBetween(node, t - node) - kt;
-      if (d < CLOSE_KT && d > -CLOSE_KT) return t;
+      if (d < closeKt && d > -closeKt) return t;
       if (d > 0 === d1 > 0) {
         t1 = t;
         d1 = d;

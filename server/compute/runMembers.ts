@@ -4,7 +4,7 @@ import type { Pool } from './pool';
 import type { Sampled } from './tasks';
 
 /** Blocks a task takes: small enough that a newer advisory waits little, and that progress is seen. */
-const BLOCKS_PER_TASK = 12;
+const BLOCKS_PER_TASK = 2;
 
 interface Parts {
   chunks: MemberChunk[];

@@ -17,8 +17,8 @@ import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, Sa
 
 const TRACK_STEP_HOURS = 0.5;
 const MEMBER_STEP_HOURS = 1;
-/** Members are followed down to the lowest threshold at the roughest surface only. */
-const MEMBER_LIMIT_KT = 34;
+/** A little under the lowest threshold, so that winds between two lattice corners are known on both sides of it. */
+const MEMBER_LIMIT_KT = 28;
 const LAND_CELL_KM = 1;
 const SEA_CELL_KM = 4;
 const GRID_PLACES = 9_000;

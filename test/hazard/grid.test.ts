@@ -21,19 +21,20 @@ function swathOf(advisory: Advisory, kt: number, most = 60_000): { grid: Grid; s
 const M2_PER_KM2 = 1e6;
 
 describe('the swath of a round storm on a straight course', () => {
-  // A stadium: a rectangle as long as the course and two half discs. Plane geometry; the sphere adds less than 1 % at this size.
+  // A stadium: a rectangle as long as the course and two half discs. Plane geometry; the sphere adds less than 1 % at this size,
+  // the grid (about 4 km) rounds the rest.
   test.each([
     [34, 120],
     [50, 60],
     [64, 30],
-  ] as const)('at %i kt has the area of a stadium of radius %i nmi', (kt, radiusNm) => {
+  ] as const)('at %i kt has the area of a stadium of radius %i nmi within 2 %', (kt, radiusNm) => {
     const hours = 48;
     const speedKt = 10;
     const { swath } = swathOf(steady({ hours, speedKt }), kt);
     const radiusKm = radiusNm * 1.852;
     const lengthKm = hours * speedKt * 1.852;
     const stadiumKm2 = 2 * radiusKm * lengthKm + Math.PI * radiusKm ** 2;
-    expect(area(swath) / M2_PER_KM2 / stadiumKm2).toBeCloseTo(1, 1.5);
+    expect(Math.abs(area(swath) / M2_PER_KM2 / stadiumKm2 - 1)).toBeLessThan(0.02);
   });
 });
 
