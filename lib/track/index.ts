@@ -3,6 +3,8 @@ export { pressureFromWindHpa, windFromPressureKt } from './atkinsonHolliday1977'
 export { climatologicalVortex, climatologyRadiiKm, motionAsymmetryKt, QUADRANT_AZIMUTHS_DEG, strongSideDeg } from './climatologyRadii';
 export type { Inferred, Knot } from './knots';
 export { hermite, monotoneSlopes } from './monotoneCubic';
+export { decayExponent } from './quadrantPeaks';
+export type { QuadrantKt } from './quadrantPeaks';
 export { chavasKnaffRadiusMaxWindKm, willoughbyRadiusMaxWindKm } from './radiusMaxWind';
 export { stormAt } from './stormAt';
 export type { Ring, StormState } from './stormAt';

@@ -6,6 +6,8 @@ import { pressureFromWindHpa } from './atkinsonHolliday1977';
 import { fading } from './fading';
 import { fillRadii } from './fillRadii';
 import type { Motion } from './motion';
+import { quadrantPeaksKt } from './quadrantPeaks';
+import type { QuadrantKt } from './quadrantPeaks';
 import { chavasKnaffRadiusMaxWindKm, willoughbyRadiusMaxWindKm } from './radiusMaxWind';
 
 /** What was not in the advisory and comes from a published regression or climatology. */
@@ -23,8 +25,8 @@ export interface Knot {
   maxWindKt: number;
   minPressureHpa: number;
   radiusMaxWindKm: number;
-  /** 0: not reached. null: the advisory gives no radii at all. */
-  radiiKm: ByThreshold<QuadrantKm> | null;
+  /** Peaks and radii by quadrant, 0 where not reached; null where the advisory gives no radii at all. */
+  structure: { peaksKt: QuadrantKt; radiiKm: ByThreshold<QuadrantKm> } | null;
   stage: Stage;
   inferred: Inferred;
 }
@@ -50,7 +52,7 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
   const radiusMaxWindKm = radiiMaxWind.map((log, i) => {
     const inferred = points[i].radiusMaxWindNm === undefined;
     if (rings === null) return Math.exp(log);
-    return Math.min(Math.exp(log), insideOwnRings(rings[i], winds[i], oneMinute, inferred), inferred ? insideVanishingRings(rings, winds, i, oneMinute) : Infinity);
+    return Math.min(Math.exp(log), insideOwnRings(rings[i], winds[i], oneMinute, inferred), inferred ? insideVanishingRings(rings, i) : Infinity);
   });
   return points.map((point, i) => ({
     leadHours: leadHours[i],
@@ -59,7 +61,7 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
     maxWindKt: winds[i],
     minPressureHpa: pressures[i],
     radiusMaxWindKm: radiusMaxWindKm[i],
-    radiiKm: rings?.[i] ?? null,
+    structure: rings && { radiiKm: rings[i], peaksKt: quadrantPeaksKt(winds[i], radiusMaxWindKm[i], rings[i], oneMinute) },
     stage: point.stage ?? (point.maxWindKt < THRESHOLDS_KT[0] ? 'depression' : 'tropical'),
     inferred: {
       radiusMaxWind: point.radiusMaxWindNm === undefined,
@@ -107,16 +109,16 @@ function insideOwnRings(radiiKm: ByThreshold<QuadrantKm>, maxWindKt: number, one
   return most;
 }
 
-/** A ring that the next or the last point holds and this one does not draws in to this one's maximum: it must not grow on the way. */
-function insideVanishingRings(rings: ByThreshold<QuadrantKm>[], windsKt: number[], i: number, oneMinute: number): number {
+/** A ring that the point before or after has and this one has not draws in to this one's maximum: it must not grow on the way. */
+function insideVanishingRings(rings: ByThreshold<QuadrantKm>[], i: number): number {
   let most = Infinity;
-  THRESHOLDS_KT.forEach((kt, t) => {
-    if (windsKt[i] >= kt * oneMinute) return;
-    for (const ring of [rings[i - 1]?.[THRESHOLD_KEYS[t]], rings[i + 1]?.[THRESHOLD_KEYS[t]]]) {
-      ring?.forEach((km) => {
-        if (km > 0) most = Math.min(most, INSIDE_RING * km);
+  for (const neighbour of [rings[i - 1], rings[i + 1]]) {
+    if (!neighbour) continue;
+    for (const key of THRESHOLD_KEYS) {
+      neighbour[key].forEach((km, q) => {
+        if (km > 0 && rings[i][key][q] === 0) most = Math.min(most, INSIDE_RING * km);
       });
     }
-  });
+  }
   return most;
 }

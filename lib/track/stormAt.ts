@@ -7,10 +7,12 @@ import type { Inferred, Knot } from './knots';
 import { hermite } from './monotoneCubic';
 import { motionOf } from './motion';
 import { pathAt } from './path';
+import { peaksBetween } from './quadrantPeaks';
+import type { QuadrantKt } from './quadrantPeaks';
 import { legAt } from './track';
 import type { Track } from './track';
 
-/** A wind (1-minute, kt) and how far it reaches by quadrant; a radius inside the radius of maximum wind is as good as none. */
+/** A wind (1-minute, kt) and how far it reaches by quadrant, 0 for nowhere. Where the quadrant's peak is lower, that peak reaches so far. */
 export interface Ring {
   windKt: number;
   radiiKm: QuadrantKm;
@@ -28,8 +30,8 @@ export interface StormState {
   radiusMaxWindKm: number;
   /** Greatest distance (NE SE SW NW) of the advisory's 34, 50 and 64 kt; 0 where not reached; null where the advisory has no radii at all. */
   radiiKm: ByThreshold<QuadrantKm | null>;
-  /** What the wind profile goes through, strongest first; null where the advisory has no radii at all. */
-  rings: readonly Ring[] | null;
+  /** What the wind profile goes through, peaks and rings, strongest ring first; null where the advisory has no radii at all. */
+  structure: { peaksKt: QuadrantKt; rings: readonly Ring[] } | null;
   stage: Stage;
   inferred: Inferred;
 }
@@ -46,7 +48,7 @@ export function stormAt(track: Track, leadHours: number): StormState | null {
   const { position, velocity, heading } = pathAt(track.path, leg, fraction);
   const maxWindKt = a === b ? a.maxWindKt : hermite(fraction, hours, a.maxWindKt, b.maxWindKt, windSlopes[leg], windSlopes[leg + 1]);
   const radiusMaxWindKm = a.radiusMaxWindKm + fraction * (b.radiusMaxWindKm - a.radiusMaxWindKm);
-  const rings = ringsBetween(a, b, fraction, maxWindKt, track.oneMinute);
+  const structure = structureBetween(a, b, fraction, maxWindKt, track.oneMinute);
   return {
     leadHours,
     ...fromUnitVector(position),
@@ -54,13 +56,12 @@ export function stormAt(track: Track, leadHours: number): StormState | null {
     maxWindKt,
     minPressureHpa: a === b ? a.minPressureHpa : hermite(fraction, hours, a.minPressureHpa, b.minPressureHpa, pressureSlopes[leg], pressureSlopes[leg + 1]),
     radiusMaxWindKm,
-    radiiKm: byThreshold((t, kt) => {
-      if (!rings) return null;
-      const ring = rings[t];
-      if (!ring || maxWindKt < kt * track.oneMinute) return [0, 0, 0, 0];
-      return map(ring.radiiKm, (km) => (km < radiusMaxWindKm ? 0 : km));
+    radiiKm: byThreshold((t) => {
+      if (!structure) return null;
+      const { windKt, radiiKm } = structure.rings[2 - t];
+      return map(radiiKm, (km, q) => (structure.peaksKt[q] >= windKt ? km : 0));
     }),
-    rings: rings && rings.filter((ring) => ring !== null).reverse(),
+    structure,
     stage: fraction === 1 ? b.stage : a.stage,
     inferred: {
       radiusMaxWind: either(a, b, fraction, (knot) => knot.inferred.radiusMaxWind),
@@ -75,24 +76,22 @@ const either = (a: Knot, b: Knot, fraction: number, say: (knot: Knot) => boolean
 const map = (ring: QuadrantKm, make: (km: number, quadrant: 0 | 1 | 2 | 3) => number): QuadrantKm => [make(ring[0], 0), make(ring[1], 1), make(ring[2], 2), make(ring[3], 3)];
 
 /**
- * Rings at 34, 50 and 64 kt between two points, null for one that matters at neither. Radii change linearly. Where the wind falls
- * under a threshold from one point to the next, its ring draws in to the radius of maximum wind and its wind falls with the
- * maximum, so that the wind field never jumps.
+ * Peaks and rings between two points. Radii change linearly. A ring that one point has and the other has not draws in to the
+ * radius of maximum wind there, and its wind is never above the quadrant's peak, so that the wind field changes without a jump.
  */
-function ringsBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, oneMinute: number): (Ring | null)[] | null {
-  const [from, to] = [a.radiiKm, b.radiiKm];
-  if (!from || !to) return null;
-  return THRESHOLDS_KT.map((kt, t) => {
+function structureBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, oneMinute: number): StormState['structure'] {
+  if (!a.structure || !b.structure) return null;
+  const [from, to] = [a.structure, b.structure];
+  const rings = THRESHOLDS_KT.map((kt, t): Ring => {
     const key = THRESHOLD_KEYS[t];
-    const thresholdKt = kt * oneMinute;
-    const [holdsA, holdsB] = [a.maxWindKt >= thresholdKt, b.maxWindKt >= thresholdKt];
-    if (!holdsA && !holdsB) return null;
-    const radiiKm = map(from[key], (kmA, q) => {
-      const kmB = to[key][q];
-      const start = holdsA || kmB === 0 ? kmA : a.radiusMaxWindKm;
-      const end = holdsB || kmA === 0 ? kmB : b.radiusMaxWindKm;
+    const radiiKm = map(from.radiiKm[key], (kmA, q) => {
+      const kmB = to.radiiKm[key][q];
+      if (kmA === 0 && kmB === 0) return 0;
+      const start = kmA === 0 ? a.radiusMaxWindKm : kmA;
+      const end = kmB === 0 ? b.radiusMaxWindKm : kmB;
       return start + fraction * (end - start);
     });
-    return { windKt: Math.min(thresholdKt, maxWindKt), radiiKm };
+    return { windKt: kt * oneMinute, radiiKm };
   });
+  return { peaksKt: peaksBetween(from.peaksKt, a.maxWindKt, to.peaksKt, b.maxWindKt, fraction, maxWindKt), rings: rings.reverse() };
 }

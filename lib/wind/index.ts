@@ -5,7 +5,7 @@ export { AIR_DENSITY, coriolisParameter, hollandB, hollandGradientMs, hollandMax
 export type { Holland } from './holland1980';
 export { inflowAngleDeg } from './inflow';
 export { decayedOverLandKt, inlandCorrectionKt, inlandWindKt } from './kaplanDeMaria1995';
-export { decayExponent, modifiedRankine } from './modifiedRankine';
+export { modifiedRankine } from './modifiedRankine';
 export { profileKt, quadrantProfiles } from './quadrantProfiles';
 export type { QuadrantProfiles } from './quadrantProfiles';
 export { surfaceFactor, surfaceOf } from './surface';

@@ -6,8 +6,3 @@
 export function modifiedRankine(radius: number, max: number, radiusMax: number, outer: number, inner = 1): number {
   return radius < radiusMax ? max * (radius / radiusMax) ** inner : max * (radiusMax / radius) ** outer;
 }
-
-/** The exponent of a power law that falls from `inner` at `radiusInner` to `outer` at `radiusOuter`; 0 where the wind does not fall. */
-export function decayExponent(radiusInner: number, inner: number, radiusOuter: number, outer: number): number {
-  return inner > outer ? Math.log(inner / outer) / Math.log(radiusOuter / radiusInner) : 0;
-}

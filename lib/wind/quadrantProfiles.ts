@@ -1,8 +1,7 @@
-import { QUADRANT_AZIMUTHS_DEG } from '../track';
+import { decayExponent, QUADRANT_AZIMUTHS_DEG } from '../track';
 import type { Ring, StormState } from '../track';
 import { ktToMs } from '../units';
 import { schwerdtAsymmetryKt } from './asymmetry';
-import { decayExponent } from './modifiedRankine';
 import { willoughbyInnerExponent, willoughbyShape, willoughbyShareOfMax } from './willoughby2006';
 import type { WilloughbyShape } from './willoughby2006';
 
@@ -23,8 +22,6 @@ export interface QuadrantProfiles {
   parametric: WilloughbyShape | null;
 }
 
-/** "Does not reach": the peak of such a quadrant stays this far under the threshold. */
-const UNDER_THRESHOLD_KT = 0.1;
 /** Surface wind over the wind at flight level near the maximum: Powell, Uhlhorn and Kepert (2009), Wea. Forecasting 24, 868-883. */
 const SURFACE_OVER_FLIGHT = 0.9;
 /** Beyond the outermost ring the last decay goes on, within what observed outer winds decay by (Hughes, 1952: 0.4 to 0.6) and constant angular momentum (1). */
@@ -33,24 +30,21 @@ const OUTER_EXPONENTS = [0.5, 1] as const;
 const LEAST_STEP = 1.0005;
 
 /**
- * The wind against radius that honours an advisory's radii: in each quadrant through the peak at the radius of maximum wind and
- * through every ring, by a modified Rankine vortex in each stretch between. The maximum is attained in the quadrant whose
- * innermost ring is widest; the others peak where the same decay, followed inward from their own ring, puts them; a quadrant that a
- * threshold does not reach peaks under it. Motion asymmetry is not added: the maximum and the rings contain it.
+ * The wind against radius that honours an advisory's radii: in each quadrant from the peak at the radius of maximum wind through
+ * every ring, by a modified Rankine vortex in each stretch between. Motion asymmetry is not added: maximum and rings contain it.
  *
  * Without radii the shape is that of Willoughby, Darling and Rahn (2006), with Schwerdt's motion asymmetry such that the strongest
  * quadrant attains the maximum.
  */
 export function quadrantProfiles(state: StormState): QuadrantProfiles {
-  const { maxWindKt, radiusMaxWindKm, lat } = state;
+  const { maxWindKt, radiusMaxWindKm, lat, structure } = state;
   const flightMs = ktToMs(maxWindKt) / SURFACE_OVER_FLIGHT;
-  const { rings } = state;
-  const peaks = rings ? ringPeaksKt(state, rings) : motionPeaksKt(state);
+  const peaks = structure ? structure.peaksKt : motionPeaksKt(state);
   return {
     radiusMaxWindKm,
     innerExponent: willoughbyInnerExponent(flightMs, lat),
-    quadrants: peaks.map((peakKt, q) => throughRings(radiusMaxWindKm, peakKt, rings ?? [], q)),
-    parametric: rings ? null : willoughbyShape(flightMs, lat),
+    quadrants: peaks.map((peakKt, q) => throughRings(radiusMaxWindKm, peakKt, structure?.rings ?? [], q)),
+    parametric: structure ? null : willoughbyShape(flightMs, lat),
   };
 }
 
@@ -61,37 +55,13 @@ function motionPeaksKt({ maxWindKt, motionKt, motionTowardDeg, lat }: StormState
   return asymmetry.map((addedKt) => Math.max(maxWindKt / 2, maxWindKt - strongest + addedKt));
 }
 
-/** Peaks by quadrant from rings, weakest first in effect: each stronger ring sets the peak anew where it reaches and caps it where it does not. */
-function ringPeaksKt({ maxWindKt, radiusMaxWindKm }: StormState, rings: readonly Ring[]): number[] {
-  if (rings.length === 0) return [maxWindKt, maxWindKt, maxWindKt, maxWindKt];
-  const peaks = [0, 0, 0, 0];
-  for (let i = rings.length - 1; i >= 0; i--) {
-    const { windKt, radiiKm } = rings[i];
-    const widest = Math.max(...radiiKm);
-    const capKt = Math.min(windKt, maxWindKt) - UNDER_THRESHOLD_KT;
-    const exponent = widest > radiusMaxWindKm ? decayExponent(radiusMaxWindKm, Math.max(maxWindKt, windKt), widest, windKt) : 0;
-    for (let q = 0; q < 4; q++) {
-      const share = radiiKm[q] / radiusMaxWindKm;
-      if (share >= 1) peaks[q] = Math.min(maxWindKt, windKt * share ** exponent);
-      else {
-        const under = peaks[q] === 0 ? capKt : Math.min(peaks[q], capKt);
-        // A ring that grows out of nothing lifts the peak as it comes up to the radius of maximum wind.
-        peaks[q] = under + share * (capKt - under);
-      }
-    }
-  }
-  const strongest = peaks.indexOf(Math.max(...peaks));
-  peaks[strongest] = maxWindKt;
-  return peaks;
-}
-
 function throughRings(radiusMaxWindKm: number, peakKt: number, rings: readonly Ring[], quadrant: number): QuadrantProfile {
   const radiusKm = [radiusMaxWindKm];
   const windKt = [peakKt];
   for (const ring of rings) {
     const radius = ring.radiiKm[quadrant];
     const last = radiusKm.length - 1;
-    if (radius < radiusMaxWindKm) continue;
+    if (radius === 0) continue;
     radiusKm.push(Math.max(radius, radiusKm[last] * LEAST_STEP));
     windKt.push(Math.min(ring.windKt, windKt[last]));
   }
