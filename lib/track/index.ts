@@ -10,3 +10,4 @@ export { stormAt } from './stormAt';
 export type { Ring, StormState } from './stormAt';
 export { centreAt, makeTrack } from './track';
 export type { Track } from './track';
+export { withPast } from './withPast';

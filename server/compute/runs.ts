@@ -1,6 +1,7 @@
 import { createHash, randomUUID } from 'node:crypto';
 import type { Logger } from 'pino';
 import type { Impact, RunParticulars } from '../../lib/impact';
+import { withPast } from '../../lib/track';
 import { eventNowMs } from '../../lib/wire';
 import type { StoredAdvisory } from '../../lib/wire';
 import type { Bus, Runs, WallClock } from '../services';
@@ -67,12 +68,13 @@ export function openRuns({ settings, store, bus, logger, clock, demoCoastFile, p
     stopIfCancelled();
     const earlier = await earlierThan(advisory, 'track');
     const seed = seedOf(advisory);
-    const trackAnswer = await pool.track({ advisory, exposure, run: particulars(event, advisory, seed), earlier });
+    const known = withPast(advisory, await advisoriesBefore(advisory));
+    const trackAnswer = await pool.track({ advisory: known, exposure, run: particulars(event, advisory, seed), earlier });
     stopIfCancelled();
     bus.emit('impact', await store.impacts.publish({ impact: trackAnswer.impact, bulk: trackAnswer.bulk }));
     const trackMs = performance.now() - started;
 
-    const sampled = await pool.sample({ advisory, members: settings.MEMBERS, seed, exposure, coastFile: exposures.coastFile(event) });
+    const sampled = await pool.sample({ advisory: known, members: settings.MEMBERS, seed, exposure, coastFile: exposures.coastFile(event) });
     stopIfCancelled();
     const parts = await runMembers(pool, sampled, exposure, stopIfCancelled, (done, of) => bus.emit('progress', { eventId, runId: run.runId, done, of }));
     const members = await pool.assemble({
@@ -87,6 +89,12 @@ export function openRuns({ settings, store, bus, logger, clock, demoCoastFile, p
     const { peak, arrival } = trackAnswer.bulk;
     bus.emit('impact', await store.impacts.publish({ impact: members.impact, bulk: { peak, arrival, ...members.bulk } }));
     logger.info({ eventId, advisory: advisory.number, trackMs: Math.round(trackMs), membersMs: Math.round(performance.now() - started - trackMs) }, 'impact computed');
+  }
+
+  /** The advisories that may hold where the storm was in the two days before this one. */
+  async function advisoriesBefore(advisory: StoredAdvisory): Promise<StoredAdvisory[]> {
+    const { items } = await store.advisories.list(advisory.eventId, { offset: 0, limit: 200 });
+    return items.filter((other) => other.sequence < advisory.sequence);
   }
 
   /** The impact to measure change against: that of the advisory before, at the same stage. */
