@@ -27,6 +27,7 @@ export function ArrivalStrip({ zones, impact, nowMs }: { zones: readonly ZoneVie
     return stripSpan(minuteMs, all.flatMap((row) => row.bars.map((bar) => bar.lateMs ?? bar.endMs)), all.map((row) => row.startByMs));
   }, [byId, minuteMs]);
   const lines = useMemo(() => sixHourLines(span, formats.timeZone), [span, formats.timeZone]);
+  // eslint-disable-next-line react-hooks/incompatible-library -- no compiler runs here
   const virtual = useVirtualizer({ count: rows.length, getScrollElement: () => scroller.current, estimateSize: () => ROW_PX, overscan: 8 });
   if (nowMs === null || !impact || rows.length === 0) return <section className={styles.strip} aria-label={words.strip.label}><h2 className={styles.title}>{words.strip.title}</h2><p className={styles.empty}>{words.strip.empty}</p></section>;
   return (

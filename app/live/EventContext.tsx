@@ -9,7 +9,7 @@ import { prefsStore } from '../prefs/prefs';
 import { createBulk } from './bulk';
 import type { Bulk } from './bulk';
 import { eventMsAt } from './clock';
-import { connectEvent } from './connect';
+import { makeLiveEvent } from './connect';
 import type { LiveEvent } from './connect';
 import { followRevisions } from './follow';
 import type { EventState } from './state';
@@ -25,20 +25,18 @@ interface Hold {
 
 const HoldContext = createContext<Hold | null>(null);
 
-/** Opens an event for everything below it, and closes it when it goes. */
-export function EventProvider({ eventId, children, waiting }: { eventId: string; children: ReactNode; waiting: ReactNode }) {
-  const [hold, setHold] = useState<Hold | null>(null);
+/** Opens an event for everything below it, and closes it when it goes. Give it the event's id as its key. */
+export function EventProvider({ eventId, children }: { eventId: string; children: ReactNode }) {
+  const [hold] = useState<Hold>(() => ({ live: makeLiveEvent(eventId), bulk: createBulk(), view: createView() }));
   useEffect(() => {
-    const live = connectEvent(eventId);
-    const opened: Hold = { live, bulk: createBulk(), view: createView() };
-    const stop = followRevisions(live, opened.bulk, opened.view);
-    setHold(opened);
+    const close = hold.live.open();
+    const stop = followRevisions(hold.live, hold.bulk, hold.view);
     return () => {
       stop();
-      live.close();
+      close();
     };
-  }, [eventId]);
-  return hold ? <HoldContext value={hold}>{children}</HoldContext> : waiting;
+  }, [hold]);
+  return <HoldContext value={hold}>{children}</HoldContext>;
 }
 
 export function useHold(): Hold {

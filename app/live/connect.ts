@@ -11,14 +11,40 @@ const NAMESPACE = '/live';
 
 export interface LiveEvent {
   store: StoreApi<EventState>;
-  session: Session;
-  close(): void;
+  session: Pick<Session, 'seen' | 'tell'>;
+  /** Opens the socket; returns the function that closes it. */
+  open(): () => void;
 }
 
-/** Opens the socket of an event in this browser. The owner calls `close()`. */
-export function connectEvent(eventId: string): LiveEvent {
+/** One event in this browser: its store, and a socket outside React that keeps it in step while it is open. */
+export function makeLiveEvent(eventId: string): LiveEvent {
   const store = createStore<EventState>(() => startState(eventId, Date.now()));
-  const socket = io(NAMESPACE, {
+  let session: Session | null = null;
+  return {
+    store,
+    session: {
+      seen: (revision) => session?.seen(revision),
+      tell: (happening) => session?.tell(happening),
+    },
+    open() {
+      const opened = openSession(store, makeSocket(), { nowMs: () => Date.now(), later });
+      session = opened;
+      const online = (): void => opened.network(true);
+      const offline = (): void => opened.network(false);
+      window.addEventListener('online', online);
+      window.addEventListener('offline', offline);
+      return () => {
+        window.removeEventListener('online', online);
+        window.removeEventListener('offline', offline);
+        opened.close();
+        session = null;
+      };
+    },
+  };
+}
+
+const makeSocket = (): LiveSocket =>
+  io(NAMESPACE, {
     autoConnect: false,
     forceNew: true,
     withCredentials: true,
@@ -26,25 +52,9 @@ export function connectEvent(eventId: string): LiveEvent {
     tryAllTransports: true,
     reconnectionDelay: 400,
     reconnectionDelayMax: 4000,
-  });
-  const session = openSession(store, socket as unknown as LiveSocket, {
-    nowMs: () => Date.now(),
-    later: (ms, run) => {
-      const timer = setTimeout(run, ms);
-      return () => clearTimeout(timer);
-    },
-  });
-  const online = (): void => session.network(true);
-  const offline = (): void => session.network(false);
-  window.addEventListener('online', online);
-  window.addEventListener('offline', offline);
-  return {
-    store,
-    session,
-    close() {
-      window.removeEventListener('online', online);
-      window.removeEventListener('offline', offline);
-      session.close();
-    },
-  };
+  }) as unknown as LiveSocket;
+
+function later(ms: number, run: () => void): () => void {
+  const timer = setTimeout(run, ms);
+  return () => clearTimeout(timer);
 }

@@ -15,18 +15,12 @@ import { isTab } from './tabs';
 export function EventShell({ eventId, children }: { eventId: string; children: ReactNode }) {
   return (
     <Identified>
-      <EventProvider eventId={eventId} waiting={<Waiting />}>
+      <EventProvider key={eventId} eventId={eventId}>
         <Frame eventId={eventId}>{children}</Frame>
       </EventProvider>
     </Identified>
   );
 }
-
-const Waiting = () => (
-  <p className={styles.waiting} role="status">
-    {words.common.loading}
-  </p>
-);
 
 function Frame({ eventId, children }: { eventId: string; children: ReactNode }) {
   const segment = useSelectedLayoutSegment() ?? 'board';

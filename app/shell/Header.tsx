@@ -19,7 +19,7 @@ export function Header({ eventId, tab }: { eventId: string; tab: Tab }) {
     <header className={styles.header}>
       <div className={styles.storm}>
         <h1 title={event?.name}>
-          <Link href="/" className={styles.home} aria-label={`${shown?.storm.name ?? event?.name ?? ''}, ${words.common.home}`}>
+          <Link href="/?list" className={styles.home} aria-label={`${shown?.storm.name ?? event?.name ?? ''}, ${words.common.home}`}>
             {shown?.storm.name ?? event?.name ?? '\u00a0'}
           </Link>
         </h1>

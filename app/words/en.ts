@@ -176,6 +176,7 @@ export const en = {
       pointsHint: 'Times in UTC as 2031-09-19 09:00. North and east are positive. Paste rows from a spreadsheet into any cell.',
       add: 'Add a point',
       remove: (row: number) => `Remove point ${row}`,
+      removeHead: 'Remove',
       check: 'Check it',
       back: 'Back to files',
       cell: (column: string, row: number) => `${column}, point ${row}`,
