@@ -1,7 +1,8 @@
+import type { CheckContext } from './checks';
 import type { Format, InputError, Warning } from './model';
 
-/** How a file is to be read. `technique` and `cycle` (`2026092512`) choose within a deck. */
-export interface ReadOptions {
+/** How a file is to be read, and what its advisory is held against. `technique` and `cycle` (`2026092512`) choose within a deck. */
+export interface ReadOptions extends CheckContext {
   format?: Format;
   technique?: string;
   cycle?: string;

@@ -2,20 +2,21 @@ import { advisorySchema } from './model';
 import { checkAdvisory } from './checks';
 import { shown } from './instants';
 import { THRESHOLD_KEYS } from '../units';
+import type { CheckContext } from './checks';
 import type { Draft } from './draft';
 import type { Advisory, Format, InputError, Reading } from './model';
 
 type Issue = { path: readonly PropertyKey[]; message: string; code?: string | undefined; keys?: readonly string[] };
 
 /** The last step of every format: the model's bounds, the order of times, and the warnings. */
-export function finish(format: Format, draft: Draft): Reading {
+export function finish(format: Format, draft: Draft, context: CheckContext = {}): Reading {
   const parsed = advisorySchema.safeParse(draft.advisory);
   if (!parsed.success) {
     return { ok: false, format, errors: parsed.error.issues.map((issue) => placed(draft, issue.path, describe(issue as Issue, draft.advisory))) };
   }
   const errors = orderErrors(draft, parsed.data);
   if (errors.length > 0) return { ok: false, format, errors };
-  const checked = checkAdvisory(parsed.data).map((warning) => ({ ...draft.placeOf(keyOf(warning.path ?? '')), ...warning }));
+  const checked = checkAdvisory(parsed.data, context).map((warning) => ({ ...draft.placeOf(keyOf(warning.path ?? '')), ...warning }));
   return { ok: true, format, advisory: parsed.data, warnings: [...draft.warnings, ...checked] };
 }
 

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { columnOf } from './columns';
 import { failed } from './draft';
 import { parseJson } from './json-places';

@@ -1,9 +1,7 @@
 /** A forecast as data, and a reader for each form it arrives in. */
 export * from './model';
 export { checkAdvisory } from './checks';
-export type { CheckContext } from './checks';
 export { decodeText } from './decode-text';
-export type { Decoded } from './decode-text';
 export { listDeck } from './deck';
 export type { DeckEntry } from './deck';
 export { detectFormat } from './detect-format';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { THRESHOLD_KEYS } from '../units';
 
 /** An instant, ISO 8601 in UTC with `Z`. */

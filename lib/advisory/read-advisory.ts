@@ -26,7 +26,8 @@ const NOT_RECOGNISED =
  * Reads a forecast in any form. The form is told from the content unless `options.format` names it.
  *
  * Never throws: what is wrong comes back as `errors`, each saying where (lines and columns count from 1)
- * and how to mend it; what is only odd comes back as `warnings` beside the advisory.
+ * and how to mend it; what is only odd comes back as `warnings` beside the advisory, also against the
+ * event's clock and the advisory before where `options.nowMs` and `options.previous` give them.
  *
  * @example
  * const reading = readAdvisory(text);
@@ -38,7 +39,7 @@ export function readAdvisory(text: string, options: ReadOptions = {}): Reading {
   const format = options.format ?? detectFormat(plain);
   if (format === null) return { ok: false, format, errors: [{ line: 1, message: NOT_RECOGNISED }] };
   const read = READERS[format](plain, options);
-  const reading: Reading = read.ok ? finish(format, read.draft) : { ok: false, format, errors: read.errors };
+  const reading: Reading = read.ok ? finish(format, read.draft, options) : { ok: false, format, errors: read.errors };
   return reading.ok ? { ...reading, warnings: listed(reading.warnings, (message) => ({ code: 'more-warnings', message })) } : { ...reading, errors: listed(reading.errors, (message) => ({ message })) };
 }
 
