@@ -34,10 +34,7 @@ export function fillRadii(points: Point[], leadHours: Float64Array, motion: Moti
     }),
   );
   const flags = given.map((rings) => rings.map((ring) => ring !== null));
-  if (!points.some((point, i) => THRESHOLD_KEYS.some((key, t) => point.radiiNm?.[key] && windsKt[i] >= THRESHOLDS_KT[t] * oneMinute))) {
-    // Without a ring anywhere the profile is parametric; all winds under the weakest threshold are as well.
-    return { km: null, given: flags };
-  }
+  if (!points.some(({ radiiNm }) => radiiNm && Object.keys(radiiNm).length > 0)) return { km: null, given: flags };
 
   const climatology = THRESHOLDS_KT.map((kt) =>
     points.map((point, i) => climatologyRadiiKm(kt * oneMinute, windsKt[i], point.lat, motion[i].motionKt, motion[i].motionTowardDeg)),

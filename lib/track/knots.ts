@@ -17,6 +17,13 @@ export interface Inferred {
   radii: ByThreshold<boolean>;
 }
 
+/** A storm's wind by quadrant: the peak, how far from the centre it stands, and the radii. */
+export interface KnotStructure {
+  peaksKt: QuadrantKt;
+  peakRadiiKm: QuadrantKm;
+  radiiKm: ByThreshold<QuadrantKm>;
+}
+
 /** The storm at one forecast point, complete. Winds are 1-minute at 10 m over water (kt). */
 export interface Knot {
   leadHours: number;
@@ -26,7 +33,7 @@ export interface Knot {
   minPressureHpa: number;
   radiusMaxWindKm: number;
   /** Peaks and radii by quadrant, 0 where not reached; null where the advisory gives no radii at all. */
-  structure: { peaksKt: QuadrantKt; radiiKm: ByThreshold<QuadrantKm> } | null;
+  structure: KnotStructure | null;
   stage: Stage;
   inferred: Inferred;
 }
@@ -49,11 +56,7 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
   const climatology = points.map((point, i) => Math.log(expectedRadiusMaxWindKm(winds[i], point.lat, radii.km?.[i]['34'] ?? null)));
   const radiiMaxWind = fading(points.map((point) => logOf(givenRadiusMaxWindKm(point))), climatology, leadHours);
   const rings = radii.km;
-  const radiusMaxWindKm = radiiMaxWind.map((log, i) => {
-    const inferred = points[i].radiusMaxWindNm === undefined;
-    if (rings === null) return Math.exp(log);
-    return Math.min(Math.exp(log), insideOwnRings(rings[i], winds[i], oneMinute, inferred), inferred ? insideVanishingRings(rings, i) : Infinity);
-  });
+  const radiusMaxWindKm = radiiMaxWind.map((log, i) => Math.min(Math.exp(log), rings ? mostRadiusMaxWindKm(rings[i], winds[i], oneMinute, points[i].radiusMaxWindNm === undefined) : Infinity));
   return points.map((point, i) => ({
     leadHours: leadHours[i],
     lat: point.lat,
@@ -61,7 +64,11 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
     maxWindKt: winds[i],
     minPressureHpa: pressures[i],
     radiusMaxWindKm: radiusMaxWindKm[i],
-    structure: rings && { radiiKm: rings[i], peaksKt: quadrantPeaksKt(winds[i], radiusMaxWindKm[i], rings[i], oneMinute) },
+    structure: rings && {
+      radiiKm: rings[i],
+      peaksKt: quadrantPeaksKt(winds[i], radiusMaxWindKm[i], rings[i], oneMinute),
+      peakRadiiKm: peakRadiiKm(radiusMaxWindKm[i], rings, i),
+    },
     stage: point.stage ?? (point.maxWindKt < THRESHOLDS_KT[0] ? 'depression' : 'tropical'),
     inferred: {
       radiusMaxWind: point.radiusMaxWindNm === undefined,
@@ -87,38 +94,31 @@ function givenRadiusMaxWindKm(point: Point): number | null {
 const logOf = (value: number | null): number | null => (value === null ? null : Math.log(value));
 
 /**
- * The most that the radius of maximum wind (km) can be beside a point's rings: inside every quadrant's innermost ring; and where it
- * is inferred, no farther in proportion than angular momentum allows, which does not fall outward (`V r` at the widest innermost
- * ring is at least `V r` at the maximum).
+ * The most that the radius of maximum wind (km) can be beside a point's rings: inside the widest ring of the strongest threshold
+ * reached; and where it is inferred, no farther in proportion than angular momentum allows, which does not fall outward (`V r` at
+ * that ring is at least `V r` at the maximum). The narrower quadrants do not bound it: in the Atlantic best tracks of 2021 and 2022 it
+ * lies outside the narrowest 64 kt radius of half of all hurricanes up to 95 kt, and outside the widest of one in a hundred.
  */
-function insideOwnRings(radiiKm: ByThreshold<QuadrantKm>, maxWindKt: number, oneMinute: number, inferred: boolean): number {
-  let most = Infinity;
-  const open = [true, true, true, true];
-  let innermost = true;
+function mostRadiusMaxWindKm(radiiKm: ByThreshold<QuadrantKm>, maxWindKt: number, oneMinute: number, inferred: boolean): number {
   for (const key of ['64', '50', '34'] as const) {
-    const ring = radiiKm[key];
-    ring.forEach((km, q) => {
-      if (km === 0 || !open[q]) return;
-      open[q] = false;
-      most = Math.min(most, INSIDE_RING * km);
-    });
-    const widest = Math.max(...ring);
-    if (widest > 0 && innermost && inferred) most = Math.min(most, (widest * Number(key) * oneMinute) / maxWindKt);
-    innermost &&= widest === 0;
+    const widest = Math.max(...radiiKm[key]);
+    if (widest > 0) return widest * Math.min(INSIDE_RING, inferred ? (Number(key) * oneMinute) / maxWindKt : 1);
   }
-  return most;
+  return Infinity;
 }
 
-/** A ring that the point before or after has and this one has not draws in to this one's maximum: it must not grow on the way. */
-function insideVanishingRings(rings: ByThreshold<QuadrantKm>[], i: number): number {
-  let most = Infinity;
-  for (const neighbour of [rings[i - 1], rings[i + 1]]) {
-    if (!neighbour) continue;
+/**
+ * Where each quadrant's peak stands (km): at the storm's radius of maximum wind, but inside the quadrant's innermost ring, and inside
+ * the rings that the point before or after has there and this one has not, which draw in to it and must not grow on the way.
+ */
+function peakRadiiKm(radiusMaxWindKm: number, rings: ByThreshold<QuadrantKm>[], i: number): QuadrantKm {
+  const within = (q: 0 | 1 | 2 | 3): number => {
+    let km = radiusMaxWindKm;
     for (const key of THRESHOLD_KEYS) {
-      neighbour[key].forEach((km, q) => {
-        if (km > 0 && rings[i][key][q] === 0) most = Math.min(most, INSIDE_RING * km);
-      });
+      const own = rings[i][key][q];
+      for (const ring of own > 0 ? [own] : [rings[i - 1]?.[key][q] ?? 0, rings[i + 1]?.[key][q] ?? 0]) if (ring > 0) km = Math.min(km, INSIDE_RING * ring);
     }
-  }
-  return most;
+    return km;
+  };
+  return [within(0), within(1), within(2), within(3)];
 }

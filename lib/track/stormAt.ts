@@ -18,6 +18,13 @@ export interface Ring {
   radiiKm: QuadrantKm;
 }
 
+/** Peaks by quadrant, how far from the centre they stand, and the rings outside them, strongest first. */
+export interface StormStructure {
+  peaksKt: QuadrantKt;
+  peakRadiiKm: QuadrantKm;
+  rings: readonly Ring[];
+}
+
 /** The storm at one moment. Winds are 1-minute at 10 m over water. */
 export interface StormState {
   leadHours: number;
@@ -30,8 +37,8 @@ export interface StormState {
   radiusMaxWindKm: number;
   /** Greatest distance (NE SE SW NW) of the advisory's 34, 50 and 64 kt; 0 where not reached; null where the advisory has no radii at all. */
   radiiKm: ByThreshold<QuadrantKm | null>;
-  /** What the wind profile goes through, peaks and rings, strongest ring first; null where the advisory has no radii at all. */
-  structure: { peaksKt: QuadrantKt; rings: readonly Ring[] } | null;
+  /** What the wind profile goes through; null where the advisory has no radii at all. */
+  structure: StormStructure | null;
   stage: Stage;
   inferred: Inferred;
 }
@@ -77,21 +84,23 @@ const map = (ring: QuadrantKm, make: (km: number, quadrant: 0 | 1 | 2 | 3) => nu
 
 /**
  * Peaks and rings between two points. Radii change linearly. A ring that one point has and the other has not draws in to the
- * radius of maximum wind there, and its wind is never above the quadrant's peak, so that the wind field changes without a jump.
+ * quadrant's peak there, and its wind is never above the peak's, so that the wind field changes without a jump.
  */
-function structureBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, oneMinute: number): StormState['structure'] {
+function structureBetween(a: Knot, b: Knot, fraction: number, maxWindKt: number, oneMinute: number): StormStructure | null {
   if (!a.structure || !b.structure) return null;
   const [from, to] = [a.structure, b.structure];
+  const between = (start: number, end: number): number => start + fraction * (end - start);
   const rings = THRESHOLDS_KT.map((kt, t): Ring => {
     const key = THRESHOLD_KEYS[t];
     const radiiKm = map(from.radiiKm[key], (kmA, q) => {
       const kmB = to.radiiKm[key][q];
-      if (kmA === 0 && kmB === 0) return 0;
-      const start = kmA === 0 ? a.radiusMaxWindKm : kmA;
-      const end = kmB === 0 ? b.radiusMaxWindKm : kmB;
-      return start + fraction * (end - start);
+      return kmA === 0 && kmB === 0 ? 0 : between(kmA || from.peakRadiiKm[q], kmB || to.peakRadiiKm[q]);
     });
     return { windKt: kt * oneMinute, radiiKm };
   });
-  return { peaksKt: peaksBetween(from.peaksKt, a.maxWindKt, to.peaksKt, b.maxWindKt, fraction, maxWindKt), rings: rings.reverse() };
+  return {
+    peaksKt: peaksBetween(from.peaksKt, a.maxWindKt, to.peaksKt, b.maxWindKt, fraction, maxWindKt),
+    peakRadiiKm: map(from.peakRadiiKm, (km, q) => between(km, to.peakRadiiKm[q])),
+    rings: rings.reverse(),
+  };
 }

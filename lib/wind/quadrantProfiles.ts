@@ -15,7 +15,6 @@ interface QuadrantProfile {
 
 /** Wind against radius in the quadrants NE, SE, SW, NW: 1-minute at 10 m over water. */
 export interface QuadrantProfiles {
-  radiusMaxWindKm: number;
   innerExponent: number;
   quadrants: QuadrantProfile[];
   /** Where the advisory has no radii, the shape outside the maximum; null where power laws through the rings give it. */
@@ -41,9 +40,8 @@ export function quadrantProfiles(state: StormState): QuadrantProfiles {
   const flightMs = ktToMs(maxWindKt) / SURFACE_OVER_FLIGHT;
   const peaks = structure ? structure.peaksKt : motionPeaksKt(state);
   return {
-    radiusMaxWindKm,
     innerExponent: willoughbyInnerExponent(flightMs, lat),
-    quadrants: peaks.map((peakKt, q) => throughRings(radiusMaxWindKm, peakKt, structure?.rings ?? [], q)),
+    quadrants: peaks.map((peakKt, q) => throughRings(structure?.peakRadiiKm[q] ?? radiusMaxWindKm, peakKt, structure?.rings ?? [], q)),
     parametric: structure ? null : willoughbyShape(flightMs, lat),
   };
 }
@@ -55,8 +53,8 @@ function motionPeaksKt({ maxWindKt, motionKt, motionTowardDeg, lat }: StormState
   return asymmetry.map((addedKt) => Math.max(maxWindKt / 2, maxWindKt - strongest + addedKt));
 }
 
-function throughRings(radiusMaxWindKm: number, peakKt: number, rings: readonly Ring[], quadrant: number): QuadrantProfile {
-  const radiusKm = [radiusMaxWindKm];
+function throughRings(peakRadiusKm: number, peakKt: number, rings: readonly Ring[], quadrant: number): QuadrantProfile {
+  const radiusKm = [peakRadiusKm];
   const windKt = [peakKt];
   for (const ring of rings) {
     const radius = ring.radiiKm[quadrant];
@@ -73,11 +71,12 @@ function throughRings(radiusMaxWindKm: number, peakKt: number, rings: readonly R
 
 /** Wind (kt, 1-minute at 10 m over water) at a radius along the governing azimuth of quadrant 0 NE, 1 SE, 2 SW, 3 NW. */
 export function profileKt(profiles: QuadrantProfiles, quadrant: number, radiusKm: number): number {
-  const { radiusMaxWindKm, innerExponent, parametric } = profiles;
+  const { innerExponent, parametric } = profiles;
   const profile = profiles.quadrants[quadrant];
+  const peakRadiusKm = profile.radiusKm[0];
   if (radiusKm <= 0) return 0;
-  if (radiusKm <= radiusMaxWindKm) return profile.windKt[0] * (radiusKm / radiusMaxWindKm) ** innerExponent;
-  if (parametric) return profile.windKt[0] * willoughbyShareOfMax(radiusKm, radiusMaxWindKm, parametric);
+  if (radiusKm <= peakRadiusKm) return profile.windKt[0] * (radiusKm / peakRadiusKm) ** innerExponent;
+  if (parametric) return profile.windKt[0] * willoughbyShareOfMax(radiusKm, peakRadiusKm, parametric);
   let i = profile.radiusKm.length - 1;
   while (i > 0 && radiusKm < profile.radiusKm[i]) i--;
   return profile.windKt[i] * (profile.radiusKm[i] / radiusKm) ** profile.exponent[i];
