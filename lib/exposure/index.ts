@@ -1,2 +1,7 @@
 /** Who and what is in the way: layers, their readers, and places in typed arrays. */
 export * from './model';
+export type { ExposedZone, Exposure } from './exposure';
+export { cornersOf } from './corners';
+export { compileExposure } from './compileExposure';
+export { readLayer } from './readLayer';
+export type { LayerOptions } from './readLayer';

@@ -1,5 +1,5 @@
 /** The compute thread's tasks. Plain functions: tests call them without a thread. */
-import { readLayer, compileExposure } from '../../lib/exposure';
+import { compileExposure, cornersOf, readLayer } from '../../lib/exposure';
 import { chanceOnGrid, forecastHazard, forecastPath, gridOver, gridPlaces, makeBlocks, memberHazard, memberPaths, nodeLeads, reachBox, tabulateStorm } from '../../lib/hazard';
 import type { MemberChunk, StormTable } from '../../lib/hazard';
 import { mergeChunks, tabulate } from '../../lib/impact';
@@ -28,14 +28,13 @@ const GRID_FINEST_KM = 8;
 export function compile({ key, layers, coastFile }: CompileTask): ExposureHandle {
   const decoder = new TextDecoder();
   const read = layers.map((layer) => {
-    const reading = readLayer(decoder.decode(layer.bytes), { kind: layer.kind, fileName: layer.fileName ?? undefined, contentType: layer.contentType, name: layer.name });
+    const reading = readLayer(decoder.decode(layer.bytes), { kind: layer.kind, fileName: layer.fileName ?? undefined, contentType: layer.contentType, assetClass: layer.name });
     if (!reading.ok) throw new Error(`Layer ${layer.name} (${layer.id}) was stored but cannot be read: ${reading.errors[0]?.message}`);
     return { layerId: layer.id, data: reading.data };
   });
-  const places = read.flatMap(({ data }) => coordinatesOf(data));
-  if (places.length === 0) return makeHandle(key, compileExposure(read, () => 'open'));
-  const bounds = boundsOf(places.map(([, lat]) => lat), places.map(([lon]) => lon), 1);
-  const mask = landMask(coastFile, bounds, LAND_CELL_KM);
+  const corners = read.flatMap(({ data }) => cornersOf(data));
+  if (corners.length === 0) return makeHandle(key, compileExposure(read, () => 'open'));
+  const mask = landMask(coastFile, boundsOf(corners.map(([, lat]) => lat), corners.map(([lon]) => lon), 1), LAND_CELL_KM);
   return makeHandle(key, compileExposure(read, (lat, lon) => surfaceOf(mask.coastDistanceKm(lat, lon))));
 }
 

@@ -1,0 +1,39 @@
+import { mkdirSync } from 'node:fs';
+import { join } from 'node:path';
+import SQLite from 'better-sqlite3';
+import { PostgresDialect, sql, SqliteDialect } from 'kysely';
+import type { Dialect, RawBuilder } from 'kysely';
+import pg from 'pg';
+import type { Settings } from '../settings';
+
+/** What differs between the two engines: everything else is one code. */
+export interface Engine {
+  name: 'sqlite' | 'postgres';
+  dialect: Dialect;
+  /** The column type of bytes. */
+  bytes: RawBuilder<unknown>;
+  /** Row locks: SQLite has one writer and needs none. */
+  locksRows: boolean;
+  /** The connection itself, for libraries that bring their own tables. */
+  connection: SQLite.Database | pg.Pool;
+}
+
+export function openEngine({ DATABASE_URL, DATA_DIR }: Pick<Settings, 'DATABASE_URL' | 'DATA_DIR'>): Engine {
+  return DATABASE_URL ? postgres(DATABASE_URL) : sqlite(join(DATA_DIR, 'leeboard.db'), DATA_DIR);
+}
+
+function sqlite(file: string, folder: string): Engine {
+  mkdirSync(folder, { recursive: true });
+  const connection = new SQLite(file);
+  connection.pragma('journal_mode = WAL');
+  // FULL: an accepted advisory is on the disk, not only in the log's cache, before it is answered.
+  connection.pragma('synchronous = FULL');
+  connection.pragma('foreign_keys = ON');
+  connection.pragma('busy_timeout = 5000');
+  return { name: 'sqlite', dialect: new SqliteDialect({ database: connection }), bytes: sql`blob`, locksRows: false, connection };
+}
+
+function postgres(url: string): Engine {
+  const connection = new pg.Pool({ connectionString: url, max: 8 });
+  return { name: 'postgres', dialect: new PostgresDialect({ pool: connection }), bytes: sql`bytea`, locksRows: true, connection };
+}

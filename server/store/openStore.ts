@@ -1,0 +1,47 @@
+import { Kysely, Migrator, sql } from 'kysely';
+import type { Settings } from '../settings';
+import { advisoryStore } from './advisoryStore';
+import { openEngine } from './engine';
+import type { Engine } from './engine';
+import { eventStore } from './eventStore';
+import { impactStore } from './impactStore';
+import { layerStore } from './layerStore';
+import { logStore } from './logStore';
+import { migrations } from './migrations';
+import type { Store } from './model';
+import type { Tables } from './tables';
+
+/** What the parts of the store share. */
+export interface Database {
+  db: Kysely<Tables>;
+  engine: Engine;
+}
+
+export interface OpenedStore extends Store {
+  /** For the auth library, which keeps its tables in the same database. */
+  engine: Engine;
+}
+
+/** Opens the database that the settings name, bringing its tables up to date. Throws with one line when it cannot. */
+export async function openStore(settings: Pick<Settings, 'DATABASE_URL' | 'DATA_DIR'>): Promise<OpenedStore> {
+  const engine = openEngine(settings);
+  const db = new Kysely<Tables>({ dialect: engine.dialect });
+  const { error } = await new Migrator({ db, provider: migrations(engine) }).migrateToLatest();
+  if (error) {
+    await db.destroy();
+    throw error instanceof Error ? error : new Error(String(error));
+  }
+  const database: Database = { db, engine };
+  return {
+    engine,
+    events: eventStore(database),
+    advisories: advisoryStore(database),
+    layers: layerStore(database),
+    impacts: impactStore(database),
+    log: logStore(database),
+    async ping() {
+      await sql`select 1`.execute(db);
+    },
+    close: () => db.destroy(),
+  };
+}
