@@ -96,6 +96,10 @@ describe('the end of the storm', () => {
     expect(codes(warnings)).toContain('dissipation-forecast');
   });
 
+  test('said twice, the first time counts', () => {
+    expect(read(ending('FORECAST VALID 20/0600Z...DISSIPATED', 'OUTLOOK VALID 21/0600Z...DISSIPATED')).advisory.dissipatesAt).toBe('2031-09-20T06:00:00Z');
+  });
+
   test('DISSIPATING is still there', () => {
     const { advisory } = read(ending('FORECAST VALID 20/0600Z 25.5N  57.0W...DISSIPATING', 'MAX WIND  25 KT.'));
     expect(advisory.points[2]).toMatchObject({ lat: 25.5, maxWindKt: 25 });
