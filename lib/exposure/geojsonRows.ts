@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { Geometry } from 'geojson';
 import type { Row } from './fields';
 import type { RowError } from './model';

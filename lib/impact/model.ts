@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { instant } from '../advisory';
 
 const perThreshold = <T extends z.ZodType>(value: T) => z.object({ '34': value, '50': value, '64': value });

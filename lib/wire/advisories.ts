@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { advisorySchema, formatSchema, inputErrorSchema, instant, warningSchema } from '../advisory';
 
 /** An advisory as stored: immutable; a correction is a new one that supersedes it. */

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { instant } from '../advisory';
 
 const timeZone = z.string().refine((value) => {

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { impactSchema } from '../impact';
 import { storedAdvisorySchema } from './advisories';
 import { eventSchema } from './events';

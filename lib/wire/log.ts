@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { instant } from '../advisory';
 
 export const newLogEntrySchema = z.object({

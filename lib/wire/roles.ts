@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** Each role holds the rights of those before it. */
 export const ROLES = ['viewer', 'operator', 'admin'] as const;
