@@ -4,7 +4,8 @@ import type { ByThreshold } from '../units';
 import type { QuadrantKm } from '../geo';
 import { pressureFromWindHpa } from './atkinsonHolliday1977';
 import { fading } from './fading';
-import { fillRadii } from './fillRadii';
+import { allRadiiKm, galeRadiiKm, givenRadii } from './fillRadii';
+import type { GivenRadii } from './fillRadii';
 import type { Motion } from './motion';
 import { quadrantPeaksKt } from './quadrantPeaks';
 import type { QuadrantKt } from './quadrantPeaks';
@@ -50,13 +51,11 @@ const EYEWALL_KM = nmiToKm(5);
 /** Completes the points of an advisory, in order of time. `oneMinute` turns the centre's winds into 1-minute winds. */
 export function makeKnots(points: Point[], leadHours: Float64Array, motion: Motion[], oneMinute: number): Knot[] {
   const winds = points.map((point) => point.maxWindKt * oneMinute);
-  const radii = fillRadii(points, leadHours, motion, winds, oneMinute);
+  const given = givenRadii(points, winds, oneMinute);
+  const gale = given && galeRadiiKm(given, points, leadHours, motion, winds, oneMinute);
   const pressures = fading(points.map((point) => point.minPressureHpa ?? null), winds.map(pressureFromWindHpa), leadHours);
-  // Radii of maximum wind fade as ratios, pressures as differences.
-  const climatology = points.map((point, i) => Math.log(expectedRadiusMaxWindKm(winds[i], point.lat, radii.km?.[i]['34'] ?? null)));
-  const radiiMaxWind = fading(points.map((point) => logOf(givenRadiusMaxWindKm(point))), climatology, leadHours);
-  const rings = radii.km;
-  const radiusMaxWindKm = radiiMaxWind.map((log, i) => Math.min(Math.exp(log), rings ? mostRadiusMaxWindKm(rings[i], winds[i], oneMinute, points[i].radiusMaxWindNm === undefined) : Infinity));
+  const radiusMaxWindKm = radiiMaxWind(points, leadHours, winds, given, gale, oneMinute);
+  const rings = given && gale && points.map((_, i) => allRadiiKm(given, gale[i], i, leadHours, winds[i], radiusMaxWindKm[i], oneMinute));
   return points.map((point, i) => ({
     leadHours: leadHours[i],
     lat: point.lat,
@@ -73,9 +72,22 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
     inferred: {
       radiusMaxWind: point.radiusMaxWindNm === undefined,
       pressure: point.minPressureHpa === undefined,
-      radii: byThreshold((t) => !radii.given[t][i]),
+      radii: byThreshold((t) => !given?.[t][i]),
     },
   }));
+}
+
+/** Radii of maximum wind (km): given, or expected from the rings with this storm's own anomaly fading as a ratio; always inside the rings. */
+function radiiMaxWind(points: Point[], leadHours: Float64Array, winds: number[], given: GivenRadii | null, gale: QuadrantKm[] | null, oneMinute: number): number[] {
+  const expected = points.map((point, i) => Math.log(expectedRadiusMaxWindKm(winds[i], point.lat, gale?.[i] ?? null)));
+  const logs = fading(points.map((point) => logOf(givenRadiusMaxWindKm(point))), expected, leadHours);
+  return points.map((point, i) => {
+    const strongest = [given?.[2][i], given?.[1][i], gale?.[i]].findIndex((ring) => ring?.some((km) => km > 0));
+    if (strongest < 0) return Math.exp(logs[i]);
+    const ring = [given?.[2][i], given?.[1][i], gale?.[i]][strongest]!;
+    const ringKt = THRESHOLDS_KT[2 - strongest] * oneMinute;
+    return Math.min(Math.exp(logs[i]), mostRadiusMaxWindKm(Math.max(...ring), ringKt, winds[i], point.radiusMaxWindNm === undefined));
+  });
 }
 
 /** Radius of maximum wind to expect: from the 34 kt radii where there are any, else from strength and latitude alone. */
@@ -94,17 +106,13 @@ function givenRadiusMaxWindKm(point: Point): number | null {
 const logOf = (value: number | null): number | null => (value === null ? null : Math.log(value));
 
 /**
- * The most that the radius of maximum wind (km) can be beside a point's rings: inside the widest ring of the strongest threshold
- * reached; and where it is inferred, no farther in proportion than angular momentum allows, which does not fall outward (`V r` at
- * that ring is at least `V r` at the maximum). The narrower quadrants do not bound it: in the Atlantic best tracks of 2021 and 2022 it
- * lies outside the narrowest 64 kt radius of half of all hurricanes up to 95 kt, and outside the widest of one in a hundred.
+ * The most that the radius of maximum wind (km) can be beside the widest radius of the strongest threshold known: inside it; and
+ * where it is inferred, no farther in proportion than angular momentum allows, which does not fall outward (`V r` at that ring is at
+ * least `V r` at the maximum). The narrower quadrants do not bound it: in the Atlantic best tracks of 2021 and 2022 it lies outside the
+ * narrowest 64 kt radius of half of all hurricanes up to 95 kt, and outside the widest of one in a hundred.
  */
-function mostRadiusMaxWindKm(radiiKm: ByThreshold<QuadrantKm>, maxWindKt: number, oneMinute: number, inferred: boolean): number {
-  for (const key of ['64', '50', '34'] as const) {
-    const widest = Math.max(...radiiKm[key]);
-    if (widest > 0) return widest * Math.min(INSIDE_RING, inferred ? (Number(key) * oneMinute) / maxWindKt : 1);
-  }
-  return Infinity;
+function mostRadiusMaxWindKm(widestKm: number, ringKt: number, maxWindKt: number, inferred: boolean): number {
+  return widestKm * Math.min(INSIDE_RING, inferred ? ringKt / maxWindKt : 1);
 }
 
 /**
