@@ -1,4 +1,3 @@
-import type { Selectable } from 'kysely';
 import { impactSchema } from '../../lib/impact';
 import type { Impact } from '../../lib/impact';
 import { layerSchema, logEntrySchema, storedAdvisorySchema } from '../../lib/wire';
@@ -10,7 +9,7 @@ import type { Tables } from './tables';
 export const ADVISORY_COLUMNS = ['id', 'event_id', 'sequence', 'body', 'format', 'warnings', 'received_at', 'received_by', 'supersedes'] as const;
 export const LAYER_COLUMNS = ['id', 'event_id', 'kind', 'name', 'version', 'rows', 'classes', 'received_at', 'received_by'] as const;
 
-type Row<T extends keyof Tables, C extends keyof Tables[T] = keyof Tables[T]> = Pick<Selectable<Tables[T]>, C>;
+type Row<T extends keyof Tables, C extends keyof Tables[T] = keyof Tables[T]> = Pick<Tables[T], C>;
 
 export const eventOf = (row: Row<'events'>): EventRecord => ({
   id: row.id,
