@@ -45,20 +45,20 @@ function pieces(ms: number, timeZone: string, locale: string, options: Intl.Date
 }
 
 /** Time of day in a zone, 24 hours: `07:14`, or `07:14:08` with seconds. */
-export function formatClock(ms: number | null, timeZone: string, seconds = false, locale = 'en-GB'): string {
+export function formatClock(ms: number | null, timeZone: string, seconds = false, locale = 'en'): string {
   if (ms === null || !Number.isFinite(ms)) return UNKNOWN;
   return timeFormat(locale, timeZone, seconds ? { ...CLOCK, second: '2-digit' } : CLOCK).format(ms);
 }
 
 /** Weekday and time in a zone: `Sat 21:40`. */
-export function formatDayTime(ms: number | null, timeZone: string, locale = 'en-GB'): string {
+export function formatDayTime(ms: number | null, timeZone: string, locale = 'en'): string {
   if (ms === null || !Number.isFinite(ms)) return UNKNOWN;
   const { weekday, hour, minute } = pieces(ms, timeZone, locale, { weekday: 'short', ...CLOCK });
   return `${weekday} ${hour}:${minute}`;
 }
 
 /** Weekday and date in a zone: `Sat 19 Sep`. */
-export function formatDate(ms: number | null, timeZone: string, locale = 'en-GB'): string {
+export function formatDate(ms: number | null, timeZone: string, locale = 'en'): string {
   if (ms === null || !Number.isFinite(ms)) return UNKNOWN;
   const { weekday, day, month } = pieces(ms, timeZone, locale, { weekday: 'short', day: 'numeric', month: 'short' });
   return `${weekday} ${day} ${month}`;

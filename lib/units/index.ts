@@ -3,5 +3,6 @@ export * from './averaging';
 export * from './convert';
 export * from './format';
 export * from './formatTime';
+export * from './saffirSimpson';
 export * from './surfaces';
 export * from './thresholds';
