@@ -52,7 +52,7 @@ export function StripLine({ row, span, nowMs, topPx, formats }: { row: StripRow;
         {row.bars.map((bar) => (
           <Bar key={bar.threshold} bar={bar} span={span} />
         ))}
-        {row.startByMs !== null && <i className={styles.deadline} data-overdue={row.startByMs < nowMs} style={{ left: `${Math.max(0, positionIn(span, row.startByMs)) * 100}%` }} />}
+        {row.startByMs !== null && <i className={styles.deadline} data-overdue={row.startByMs < nowMs} data-before={row.startByMs < span.fromMs} style={{ left: `${Math.max(0, positionIn(span, row.startByMs)) * 100}%` }} />}
       </span>
     </li>
   );

@@ -28,12 +28,12 @@ export function sixHourLines({ fromMs, toMs }: TimeSpan, timeZone: string): Grid
   return lines;
 }
 
-/** What the strip shows: from a little before now to the last end of any wind, at least two days, at most seven. */
+/** What the strip shows: from a little before now to the last end of any wind, at least a day and a half, at most seven days. */
 export function stripSpan(nowMs: number, ends: readonly (number | null)[], starts: readonly (number | null)[]): TimeSpan {
   const given = (values: readonly (number | null)[]): number[] => values.filter((value): value is number => value !== null);
-  const overdue = given(starts).filter((start) => start > nowMs - 12 * HOUR_MS);
+  const overdue = given(starts).filter((start) => start > nowMs - 4 * HOUR_MS);
   const from = Math.min(nowMs - 1.5 * HOUR_MS, ...overdue.map((start) => start - HOUR_MS / 2));
-  const to = Math.max(nowMs + 48 * HOUR_MS, ...given(ends).map((end) => end + 3 * HOUR_MS));
+  const to = Math.max(nowMs + 36 * HOUR_MS, ...given(ends).map((end) => end + 3 * HOUR_MS));
   return { fromMs: from, toMs: Math.min(to, nowMs + 168 * HOUR_MS) };
 }
 

@@ -13,6 +13,6 @@ const subscribe = (changed: () => void): (() => void) => {
 export const useRowHeight = (): number =>
   useSyncExternalStore(
     subscribe,
-    () => (window.matchMedia(NARROW).matches ? 56 : window.matchMedia(LOW).matches ? 36 : 42),
+    () => (window.matchMedia(NARROW).matches ? 50 : window.matchMedia(LOW).matches ? 36 : 42),
     () => 42,
   );

@@ -7,7 +7,7 @@ import { themeStore } from '../prefs/theme';
 import { chanceColour } from '../theme/bands';
 import { Choice } from '../ui/Choice';
 import { words } from '../words';
-import { ClassToggles } from './ClassToggles';
+import { AssetsLegend } from './AssetsLegend';
 import styles from './Map.module.css';
 
 const CHANCES = [0.05, 0.2, 0.4, 0.6, 0.8];
@@ -56,7 +56,7 @@ export function Legend() {
         {trouble ?? text.note(advisory.averaging === '10-min' ? text.convertedFrom10 : '', advisory.number, swath.revision, onTrack || stage === 'track' ? text.onTrack : text.members(formatCount(members)))}
       </p>
       <Choice quiet label={words.map.productsLabel} value={product} onChange={(next) => view.setState({ product: next })} options={PRODUCTS.map((value) => ({ value, text: words.map.products[value] }))} />
-      <ClassToggles />
+      <AssetsLegend />
     </div>
   );
 }

@@ -8,7 +8,7 @@ import { scaleLength } from './scaleBar';
 /** One bar read in kilometres above and in nautical miles (or the reader's unit) below its line. */
 export function ScaleBar({ camera, size, unit }: { camera: Camera; size: Size; unit: DistanceUnit }) {
   const perPx = kmPerPixel(camera);
-  const bar = scaleLength(perPx, 'km', 150);
+  const bar = scaleLength(perPx, 'km', 210);
   const x = size.width - bar.px - 28;
   const y = size.height - 22;
   return (

@@ -28,7 +28,9 @@ export function createDeck(parent: HTMLDivElement, { onMove, onReady, onFailed }
     useDevicePixels: Math.min(2, window.devicePixelRatio || 1),
     // Places are picked on the processor (see pick.ts): no read-back from the graphics card.
     _pickable: false,
-    onViewStateChange: ({ viewState }) => {
+    onViewStateChange: ({ viewState, interactionState }) => {
+      // deck.gl also calls this to hold the view inside the world; only the reader moves the map.
+      if (!Object.values(interactionState).some(Boolean)) return;
       const { longitude, latitude, zoom } = viewState as ViewState;
       onMove({ lon: longitude, lat: latitude, zoom });
     },

@@ -9,8 +9,11 @@ import { withAlpha } from './palette';
 
 export interface DrawnMarks {
   dots: MarkColumns;
-  glyphs: { index: number; glyph: string; position: [number, number]; colour: Rgba }[];
+  glyphs: { index: number; glyph: string; position: [number, number]; sizePx: number; colour: Rgba }[];
 }
+
+/** Shapes of a class with more than this are drawn smaller. */
+const CROWD = 200;
 
 /** Columns and icons for the classes that are shown. */
 export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, palette: Palette): DrawnMarks {
@@ -22,6 +25,7 @@ export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, palette:
   const glyphs = Array.from(columns.index, (index, i) => ({
     index,
     glyph: classes.get(marks.classes[marks.classIndex[index]])!.glyph,
+    sizePx: classes.get(marks.classes[marks.classIndex[index]])!.count > CROWD ? 8 : 12,
     position: [columns.positions[i * 2], columns.positions[i * 2 + 1]] as [number, number],
     colour: Array.from(columns.colours.subarray(i * 4, i * 4 + 4)) as Rgba,
   }));
@@ -30,17 +34,17 @@ export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, palette:
 
 /** Dots by the ten thousand from typed arrays, shapes for what is few. `key` changes when the data does. */
 export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom: number, palette: Palette, key: string): Layer[] {
-  // Shapes grow a little as one comes nearer; dots stay below a pixel and a half until then.
+  // Marks grow as one comes nearer; from afar thousands of dots are a tint, not a cover.
   const near = Math.max(0, Math.min(1, (zoom - 6) / 4));
-  const icon = { data: glyphs, iconAtlas: atlas.image as unknown as string, iconMapping: atlas.mapping, sizeUnits: 'pixels' as const, sizeScale: 11 + 9 * near, getPosition: (mark: DrawnMarks['glyphs'][number]) => mark.position };
+  const icon = { data: glyphs, iconAtlas: atlas.image as unknown as string, iconMapping: atlas.mapping, sizeUnits: 'pixels' as const, sizeScale: 1 + 0.8 * near, getSize: (mark: DrawnMarks['glyphs'][number]) => mark.sizePx, getPosition: (mark: DrawnMarks['glyphs'][number]) => mark.position };
   return [
     new ScatterplotLayer({
       id: `dots-${key}`,
-      data: { length: dots.index.length, attributes: { getPosition: { value: dots.positions, size: 2 }, getFillColor: { value: dots.colours, size: 4 } } },
+      data: { length: dots.index.length, attributes: { getPosition: { value: dots.positions, size: 2 }, getFillColor: { value: dots.colours, size: 4, normalized: true } } },
       radiusUnits: 'pixels',
       getRadius: 1,
-      radiusScale: 1.1 + 1.9 * near,
-      opacity: 0.75,
+      radiusScale: 0.75 + 2 * near,
+      opacity: 0.45 + 0.45 * near,
       stroked: false,
     }),
     new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.ink, 0.9) }),

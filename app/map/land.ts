@@ -1,7 +1,7 @@
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import type { FeatureCollection, Position } from 'geojson';
-import { outlinesOf, polygonsOf } from './shapes';
+import { outlinesOf, polygonsOf, runOnPolygon } from './shapes';
 import type { Polygon } from './shapes';
 
 export interface Land {
@@ -27,7 +27,7 @@ async function fetchLand(path: string): Promise<Land> {
   if (!response.ok) throw new Error(`${path}: ${response.status}`);
   const body = (await response.json()) as Topology<{ land: GeometryCollection }> | FeatureCollection;
   const collection = body.type === 'Topology' ? (feature(body, body.objects.land) as FeatureCollection) : body;
-  const polygons = collection.features.flatMap((one) => polygonsOf(one.geometry));
+  const polygons = collection.features.flatMap((one) => polygonsOf(one.geometry)).map(runOnPolygon);
   return { polygons, outlines: outlinesOf(polygons) };
 }
 

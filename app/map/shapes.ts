@@ -10,6 +10,31 @@ export function polygonsOf(geometry: Geometry): Polygon[] {
   return geometry.type === 'GeometryCollection' ? geometry.geometries.flatMap(polygonsOf) : [];
 }
 
+const runOn = (ring: Position[]): Position[] => {
+  let shift = 0;
+  return ring.map(([lon, lat], i) => {
+    if (i > 0) shift -= 360 * Math.round((lon - ring[i - 1][0]) / 360);
+    return [lon + shift, lat];
+  });
+};
+const middle = (ring: Position[]): number => {
+  const lons = ring.map(([lon]) => lon);
+  return (lons.reduce((a, b) => Math.min(a, b)) + lons.reduce((a, b) => Math.max(a, b))) / 2;
+};
+const turned = (ring: Position[], turns: number): Position[] => (turns === 0 ? ring : ring.map(([lon, lat]) => [lon + 360 * turns, lat]));
+
+/**
+ * The same polygon with longitudes that run on past 180 rather than jump, so that no edge crosses the whole map; its middle lies
+ * in -180..180. One that goes round a pole cannot run on and stays as it is.
+ */
+export function runOnPolygon(polygon: Polygon): Polygon {
+  const outer = runOn(polygon[0]);
+  if (Math.abs(outer[outer.length - 1][0] - outer[0][0]) > 180) return polygon;
+  const home = turned(outer, -Math.round(middle(outer) / 360));
+  const centre = middle(home);
+  return [home, ...polygon.slice(1).map(runOn).map((hole) => turned(hole, Math.round((centre - middle(hole)) / 360)))];
+}
+
 const onSeam = (a: Position, b: Position): boolean => Math.abs(a[0]) > 179.999 && Math.abs(b[0]) > 179.999;
 
 /** Outlines as lines, without the edges that only exist because a polygon is cut at the 180th meridian. */

@@ -12,9 +12,10 @@ export function useTrack(): TrackView | null {
   return useMemo(() => {
     const advisory = preview ?? shown;
     if (!advisory || nowMs === null) return null;
-    const earlier = preview ? history : history.filter((one) => shown !== null && one.sequence < shown.sequence);
+    const earlier = preview ? [] : history.filter((one) => shown !== null && one.sequence < shown.sequence);
     try {
-      return trackView(advisory, earlier, nowMs);
+      // A forecast that is only looked at may be of any year: all of it is drawn as lying ahead.
+      return trackView(advisory, earlier, preview ? -Infinity : nowMs);
     } catch {
       // Two points at one time (a file only looked at) make no way; the table still shows them.
       return null;

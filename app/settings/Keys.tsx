@@ -11,6 +11,7 @@ import ui from '../ui/ui.module.css';
 import { words } from '../words';
 import { fetchKeys, makeKey, makeLink, revokeKey } from './keyCalls';
 import type { Key } from './keyCalls';
+import styles from './Settings.module.css';
 
 const text = words.settings;
 
@@ -40,7 +41,7 @@ export function Keys() {
   };
   const given = name.trim();
   return (
-    <section className={ui.stack}>
+    <section className={`${ui.stack} ${styles.section}`}>
       <h2>{text.people}</h2>
       <p className="dim">{text.peopleHint}</p>
       <div className={ui.row}>

@@ -9,6 +9,7 @@ import page from '../ui/page.module.css';
 import ui from '../ui/ui.module.css';
 import { words } from '../words';
 import { Keys } from './Keys';
+import styles from './Settings.module.css';
 import { SignOut } from './SignOut';
 
 const text = words.settings;
@@ -25,7 +26,7 @@ export function SettingsPage() {
     <div className={`${page.page} scroll`}>
       <div className={`${page.narrow} ${ui.stack}`}>
         <h1>{text.title}</h1>
-        <section className={ui.stack}>
+        <section className={`${ui.stack} ${styles.section}`}>
           <h2>{text.mine}</h2>
           <Choice label={text.theme} value={prefs.theme} onChange={(theme) => set({ theme })} options={THEME_CHOICES.map((value) => ({ value, text: text.themes[value] }))} />
           <Choice label={text.wind} value={prefs.wind} onChange={(wind) => set({ wind })} options={asIs(WIND_UNITS)} />
@@ -34,7 +35,7 @@ export function SettingsPage() {
           <p className="dim small">{text.bandsNote}</p>
         </section>
         {event && (
-          <section className={ui.stack}>
+          <section className={`${ui.stack} ${styles.section}`}>
             <h2>{text.event}</h2>
             <p>{event.name}</p>
             <p className="dim">
@@ -42,7 +43,7 @@ export function SettingsPage() {
             </p>
           </section>
         )}
-        <section className={ui.stack}>
+        <section className={`${ui.stack} ${styles.section}`}>
           <p>{text.signedIn(me.name, me.role)}</p>
           <SignOut />
         </section>

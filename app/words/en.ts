@@ -5,9 +5,9 @@ export const en = {
   tabsLabel: 'Pages of this event',
   exercise: 'exercise',
   exerciseBand: 'Exercise: nothing on this screen is real',
-  caution: 'Planning aid. Official warnings and local authorities come first. Water kills more people than wind: see official water level and rain forecasts.',
+  caution: 'Planning aid. Official warnings and local authorities come first. Water kills more people than wind: see water level and rain.',
   howToRead: {
-    members: 'Pale: early (1 in 10) to median arrival of 34 kt. Solid: median arrival to end; fading: late end (9 in 10). Inner bars: 50 and 64 kt. Hollow: fewer than half of members. T: latest start to clear the zone.',
+    members: 'Pale: early (1 in 10) to median arrival of 34 kt. Solid: median to end, fading to late. Inner: 50 and 64 kt. Hollow: fewer than half of members. T: latest start to clear.',
     track: 'Bars: 34 kt on the forecast track, start to end. Inner bars: 50 and 64 kt. Chances and early arrivals follow with the members. T: latest start to clear the zone.',
     none: 'The board fills when the first advisory is issued.',
   },
@@ -45,7 +45,7 @@ export const en = {
   announce: (number: string, revision: number, people: string) => `Advisory ${number}, revision ${revision}: ${people} people at 34 knots or more.`,
   demo: {
     next: 'Next advisory',
-    left: (count: number) => (count === 0 ? 'all advisories issued' : `${count} left in this exercise`),
+    left: (count: number) => (count === 0 ? 'all advisories issued' : `${count} left`),
     issuing: 'Issuing',
   },
   headline: {
@@ -81,7 +81,7 @@ export const en = {
     notReached: 'not reached',
     noClearance: 'no clearance time',
     peak: (wind: string, gust: string) => `${wind}, gust ${gust}`,
-    small: (chance: string, arrives: string, clear: string) => `34 kt ${chance}, ${arrives}, clear ${clear}`,
+    small: (chance: string, arrives: string, clear: string) => `34 kt ${chance}, early ${arrives}, clear in ${clear}`,
     noneReached: 'No zone is reached by 34 kt wind on this forecast. This says nothing of rain or surge.',
     none: 'No zones yet. An admin adds them under Layers.',
     foot: (reached: number, of: number) => `${reached} of ${of} zones reached by 34 kt on the track.`,

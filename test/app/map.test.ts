@@ -1,11 +1,15 @@
 import { WebMercatorViewport } from '@deck.gl/core';
+import { readFileSync } from 'node:fs';
 import { booleanPointInPolygon } from '@turf/turf';
+import type { FeatureCollection } from 'geojson';
+import { feature } from 'topojson-client';
+import type { GeometryCollection, Topology } from 'topojson-specification';
 import { describe, expect, test } from 'vitest';
 import { boundsOf, fitted, kmPerPixel, panned, project, unproject } from '../../app/map/mercator';
 import { graticule } from '../../app/map/graticule';
 import { placeLabels } from '../../app/map/labels';
 import { scaleLength } from '../../app/map/scaleBar';
-import { outlinesOf, polygonHolds } from '../../app/map/shapes';
+import { outlinesOf, polygonHolds, polygonsOf, runOnPolygon } from '../../app/map/shapes';
 
 const size = { width: 900, height: 600 };
 const none = { top: 0, right: 0, bottom: 0, left: 0 };
@@ -107,6 +111,18 @@ describe('polygons', () => {
     for (let lon = -0.95; lon < 11; lon += 0.7)
       for (let lat = -0.95; lat < 11; lat += 0.7)
         expect(polygonHolds(holed, lon, lat), `${lon} ${lat}`).toBe(booleanPointInPolygon([lon, lat], { type: 'Polygon', coordinates: holed }));
+  });
+
+  test('no coast of Natural Earth jumps across the map, but for the one round the south pole', () => {
+    const topology = JSON.parse(readFileSync(new URL('../../public/land/land-50m.json', import.meta.url), 'utf8')) as Topology<{ land: GeometryCollection }>;
+    const collection = feature(topology, topology.objects.land) as FeatureCollection;
+    const polygons = collection.features.flatMap((one) => polygonsOf(one.geometry));
+    const jumps = (all: typeof polygons) => all.filter((polygon) => polygon[0].some(([lon], i) => i > 0 && Math.abs(lon - polygon[0][i - 1][0]) > 180));
+    expect(jumps(polygons).length).toBeGreaterThan(1);
+    const left = jumps(polygons.map(runOnPolygon));
+    expect(left).toHaveLength(1);
+    expect(Math.max(...left[0][0].map(([, lat]) => lat))).toBeLessThan(-60);
+    for (const [outer] of polygons.map(runOnPolygon)) expect(Math.abs((Math.min(...outer.map(([lon]) => lon)) + Math.max(...outer.map(([lon]) => lon))) / 2)).toBeLessThanOrEqual(180);
   });
 
   test('the cut at the 180th meridian is not drawn as an outline', () => {

@@ -29,15 +29,15 @@ describe('the six-hour grid', () => {
 });
 
 describe('the span', () => {
-  test('holds now, at least two days, and the last end of wind', () => {
+  test('holds now, at least a day and a half, and the last end of wind', () => {
     const span = stripSpan(0, [60 * hour, null], [null]);
     expect(positionIn(span, 0)).toBeGreaterThan(0);
     expect(span.toMs).toBe(63 * hour);
-    expect(stripSpan(0, [], []).toMs).toBe(48 * hour);
+    expect(stripSpan(0, [], []).toMs).toBe(36 * hour);
   });
 
   test('reaches back to a deadline that has passed, but not without end', () => {
-    expect(stripSpan(0, [], [-5 * hour]).fromMs).toBeLessThan(-5 * hour);
+    expect(stripSpan(0, [], [-3 * hour]).fromMs).toBeLessThan(-3 * hour);
     expect(stripSpan(0, [], [-500 * hour]).fromMs).toBe(-1.5 * hour);
     expect(stripSpan(0, [900 * hour], []).toMs).toBe(168 * hour);
   });
