@@ -6,7 +6,7 @@ import { forecastPath } from './paths';
 import type { StormTable } from './stormTable';
 
 /** Winds over water below this (kt) are reported as zero. */
-const LIMIT_KT = 10;
+const LIMIT_KT = 15;
 
 /**
  * The forecast track's wind at each place: greatest sustained wind at the place's own surface (kt), when it comes, and first and
@@ -19,9 +19,9 @@ export interface PlaceHazard {
   end: Float32Array;
 }
 
-export function forecastHazard(table: StormTable, places: Places, blocks: Blocks): PlaceHazard {
-  const paths = forecastPath(table, LIMIT_KT);
-  const passage = new Passage(table, paths, CLOSELY);
+export function forecastHazard(table: StormTable, places: Places, blocks: Blocks, care = CLOSELY, limitKt = LIMIT_KT): PlaceHazard {
+  const paths = forecastPath(table, limitKt);
+  const passage = new Passage(table, paths, care);
   const hazard: PlaceHazard = {
     peakKt: new Float32Array(places.count),
     peakLead: new Float32Array(places.count).fill(NaN),

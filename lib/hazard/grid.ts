@@ -63,8 +63,9 @@ export function gridOver(box: { west: number; east: number; south: number; north
   };
 }
 
-/** Side of the square tiles a grid is cut into, so that blocks of its places are compact. */
-const TILE = 16;
+/** Side of the square tiles a grid is cut into, so that blocks of its places are compact; a block is a tile. */
+const TILE = 8;
+export const TILE_PLACES = TILE * TILE;
 
 /** The grid's places over water, tile by tile, and the index in the grid of each. */
 export function gridPlaces(grid: Grid): { places: Places; gridIndex: Uint32Array } {

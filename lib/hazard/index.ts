@@ -5,6 +5,8 @@ export * from './contours';
 export * from './forecastHazard';
 export * from './grid';
 export * from './memberHazard';
+export { CLOSELY, QUICKLY } from './passage';
+export type { Care } from './passage';
 export * from './paths';
 export * from './quantiles';
 export * from './stormTable';

@@ -4,8 +4,8 @@ import type { Paths } from './paths';
 import { BINS, BINS_PER_ROOT, QUADRANTS } from './stormTable';
 import type { StormTable } from './stormTable';
 
-/** The core, in radii of maximum wind. */
-const CORE_RADII = 2;
+/** The core reaches to twice the radius of maximum wind; distances here are roots, in radii of maximum wind. */
+const CORE_ROOT = Math.SQRT2;
 
 /** How closely a passage is looked at. */
 export interface Care {
@@ -23,9 +23,9 @@ export const QUICKLY: Care = { coreCuts: 4, closeKt: 0.25, mostSteps: 3 };
 
 
 const NE = 0;
-const SE = BINS;
-const SW = 2 * BINS;
-const NW = 3 * BINS;
+const SE = 1;
+const SW = 2;
+const NW = 3;
 
 /**
  * One storm path passing one place: the kernel. Fields hold the answer of the last call: winds in kt at 10 m over water,
@@ -50,8 +50,8 @@ export class Passage {
   private px = 0;
   private py = 0;
   private pz = 0;
-  /** Distance at the last look-up, in radii of maximum wind. */
-  private lastRadius = 0;
+  /** Root of the distance at the last look-up, in radii of maximum wind. */
+  private lastRoot = 0;
 
   constructor(table: StormTable, paths: Paths, care: Care) {
     this.table = table;
@@ -92,7 +92,7 @@ export class Passage {
     let peakAt = NaN;
     let before = 0;
     let here = this.windAtNode(first);
-    let hereRadius = this.lastRadius;
+    let hereRoot = this.lastRoot;
     times[n] = first;
     winds[n++] = here;
     if (here > peak) {
@@ -101,15 +101,15 @@ export class Passage {
     }
     for (let i = first; i < last; i++) {
       const next = this.windAtNode(i + 1);
-      const nextRadius = this.lastRadius;
-      if (hereRadius < CORE_RADII || nextRadius < CORE_RADII) {
-        let radius = hereRadius;
+      const nextRoot = this.lastRoot;
+      if (hereRoot < CORE_ROOT || nextRoot < CORE_ROOT) {
+        let root = hereRoot;
         for (let cut = 1; cut <= coreCuts; cut++) {
           const wind = cut < coreCuts ? this.windBetween(i, cut / coreCuts) : next;
-          const cutRadius = cut < coreCuts ? this.lastRadius : nextRadius;
-          if (radius < 1 !== cutRadius < 1) {
+          const cutRoot = cut < coreCuts ? this.lastRoot : nextRoot;
+          if (root < 1 !== cutRoot < 1) {
             // The wind is greatest just as the place crosses the radius of maximum wind.
-            const f = (cut - 1 + (1 - radius) / (cutRadius - radius)) / coreCuts;
+            const f = (cut - 1 + (1 - root) / (cutRoot - root)) / coreCuts;
             const cusp = this.windBetween(i, f);
             times[n] = i + f;
             winds[n++] = cusp;
@@ -118,7 +118,7 @@ export class Passage {
               peakAt = i + f;
             }
           }
-          radius = cutRadius;
+          root = cutRoot;
           if (cut === coreCuts) break;
           times[n] = i + cut / coreCuts;
           winds[n++] = wind;
@@ -158,7 +158,7 @@ export class Passage {
       }
       before = here;
       here = next;
-      hereRadius = nextRadius;
+      hereRoot = nextRoot;
     }
     this.peakKt = peak;
     this.peakLead = this.lead(peakAt);
@@ -212,16 +212,21 @@ export class Passage {
   }
 
   private windAtNode(i: number): number {
-    const { frame, ratio, scaleKm } = this.paths;
+    const { frame, ratio, perRootSize, reachSin2 } = this.paths;
     const at = this.base + i;
     const o = at * FRAME;
     const east = this.px * frame[o + 3] + this.py * frame[o + 4];
     const north = this.px * frame[o + 5] + this.py * frame[o + 6] + this.pz * frame[o + 7];
-    return ratio[at] * this.lookUp(i * QUADRANTS * BINS, east, north, scaleKm[at]);
+    // Beyond reach the wind is under the limit: how much under does not matter.
+    if (east * east + north * north > reachSin2[at]) {
+      this.lastRoot = Infinity;
+      return 0;
+    }
+    return ratio[at] * this.lookUp(i, east, north, perRootSize[at]);
   }
 
   private windBetween(i: number, f: number): number {
-    const { frame, ratio, scaleKm } = this.paths;
+    const { frame, ratio, perRootSize } = this.paths;
     const at = this.base + i;
     const o = at * FRAME;
     const p = o + FRAME;
@@ -231,10 +236,9 @@ export class Passage {
     const north1 = this.px * frame[p + 5] + this.py * frame[p + 6] + this.pz * frame[p + 7];
     const east = east0 + f * (east1 - east0);
     const north = north0 + f * (north1 - north0);
-    const scale = scaleKm[at] + f * (scaleKm[at + 1] - scaleKm[at]);
-    const row = i * QUADRANTS * BINS;
-    const wind0 = this.lookUp(row, east, north, scale);
-    const wind1 = this.lookUp(row + QUADRANTS * BINS, east, north, scale);
+    const perRoot = perRootSize[at] + f * (perRootSize[at + 1] - perRootSize[at]);
+    const wind0 = this.lookUp(i, east, north, perRoot);
+    const wind1 = this.lookUp(i + 1, east, north, perRoot);
     return (ratio[at] + f * (ratio[at + 1] - ratio[at])) * (wind0 + f * (wind1 - wind0));
   }
 
@@ -243,30 +247,37 @@ export class Passage {
    * frame, so that their length is the sine of the angular distance and their direction the azimuth. Neighbouring quadrants are
    * blended with squared-cosine weights, exact at NE, SE, SW and NW.
    */
-  private lookUp(row: number, east: number, north: number, scaleKm: number): number {
+  private lookUp(node: number, east: number, north: number, perRootSize: number): number {
+    const { windKt, perRootKm } = this.table;
     const sin2 = east * east + north * north;
     const sin = Math.sqrt(sin2);
-    const radius = (EARTH_RADIUS_KM * sin * (1 + sin2 * (1 / 6 + sin2 * 0.075))) / scaleKm;
-    this.lastRadius = radius;
-    const position = Math.sqrt(radius) * BINS_PER_ROOT;
-    if (position >= BINS - 2) return 0;
-    const bin = position | 0;
-    const f = position - bin;
+    const root = Math.sqrt(EARTH_RADIUS_KM * sin * (1 + sin2 * (1 / 6 + sin2 * 0.075))) * perRootSize;
     const k = sin2 > 0 ? (2 * east * north) / sin2 : 0;
     let first: number;
     let second: number;
     if (Math.abs(east) >= Math.abs(north)) {
-      first = east > 0 ? NE : SW;
-      second = east > 0 ? SE : NW;
+      first = node * QUADRANTS + (east > 0 ? NE : SW);
+      second = node * QUADRANTS + (east > 0 ? SE : NW);
     } else {
-      first = north > 0 ? NE : SW;
-      second = north > 0 ? NW : SE;
+      first = node * QUADRANTS + (north > 0 ? NE : SW);
+      second = node * QUADRANTS + (north > 0 ? NW : SE);
     }
-    const { windKt } = this.table;
-    const a = row + first + bin;
-    const b = row + second + bin;
-    const windA = windKt[a] + f * (windKt[a + 1] - windKt[a]);
-    const windB = windKt[b] + f * (windKt[b + 1] - windKt[b]);
-    return windB + 0.5 * (1 + k) * (windA - windB);
+    const weight = 0.5 * (1 + k);
+    const atA = root * perRootKm[first];
+    const atB = root * perRootKm[second];
+    this.lastRoot = (atB + weight * (atA - atB)) / BINS_PER_ROOT;
+    let windA = 0;
+    let windB = 0;
+    if (atA < BINS - 2) {
+      const bin = atA | 0;
+      const a = first * BINS + bin;
+      windA = windKt[a] + (atA - bin) * (windKt[a + 1] - windKt[a]);
+    }
+    if (atB < BINS - 2) {
+      const bin = atB | 0;
+      const b = second * BINS + bin;
+      windB = windKt[b] + (atB - bin) * (windKt[b + 1] - windKt[b]);
+    }
+    return windB + weight * (windA - windB);
   }
 }

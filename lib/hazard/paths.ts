@@ -1,5 +1,6 @@
+import { EARTH_RADIUS_KM } from '../geo';
 import type { Members } from '../members';
-import { BINS, binRadius } from './stormTable';
+import { reachKm } from './stormTable';
 import type { StormTable } from './stormTable';
 
 /** Numbers kept for each node of a path: the centre's unit vector, and the unit vectors to its east (two, the third is 0) and north. */
@@ -7,8 +8,8 @@ export const FRAME = 8;
 
 /**
  * Storm paths ready for the kernel, `[path][node]`. A path is the tabulated storm moved to another centre, its wind multiplied by
- * `ratio` and its radius of maximum wind set to `scaleKm`, all other radii in proportion. `reachKm` is where its wind falls below
- * the limit it was made for.
+ * `ratio` and its radii by `size`, of which the inverse root is kept. `reachKm` is where its wind falls below the limit it was
+ * made for.
  */
 export interface Paths {
   count: number;
@@ -16,11 +17,16 @@ export interface Paths {
   limitKt: number;
   frame: Float64Array;
   ratio: Float32Array;
-  scaleKm: Float32Array;
+  perRootSize: Float32Array;
   reachKm: Float32Array;
+  /** Beyond this the wind is not even looked up: square of the sine of the angular distance at which it is well under the limit. */
+  reachSin2: Float32Array;
 }
 
 const RAD = Math.PI / 180;
+
+/** Winds are known down to this share of the limit, so that a rise to the limit is seen whole. */
+const WELL_UNDER = 0.7;
 
 function emptyPaths(count: number, nodes: number, limitKt: number, allocate: (bytes: number) => ArrayBufferLike): Paths {
   return {
@@ -29,8 +35,9 @@ function emptyPaths(count: number, nodes: number, limitKt: number, allocate: (by
     limitKt,
     frame: new Float64Array(allocate(count * nodes * FRAME * 8)),
     ratio: new Float32Array(allocate(count * nodes * 4)),
-    scaleKm: new Float32Array(allocate(count * nodes * 4)),
+    perRootSize: new Float32Array(allocate(count * nodes * 4)),
     reachKm: new Float32Array(allocate(count * nodes * 4)),
+    reachSin2: new Float32Array(allocate(count * nodes * 4)),
   };
 }
 
@@ -50,16 +57,10 @@ function setNode(paths: Paths, table: StormTable, node: number, at: number, lat:
   frame[o + 6] = -sinLat * sinLon;
   frame[o + 7] = cosLat;
   paths.ratio[at] = ratio;
-  const scaleKm = size * table.radiusMaxWindKm[node];
-  paths.scaleKm[at] = scaleKm;
-  paths.reachKm[at] = ratio > 0 ? envelopeReach(table, node, paths.limitKt / ratio) * scaleKm : 0;
-}
-
-/** Greatest radius (in radii of maximum wind) at which a node's storm still has `limitKt` somewhere; 0 when it nowhere does. */
-function envelopeReach(table: StormTable, node: number, limitKt: number): number {
-  const row = node * BINS;
-  for (let bin = BINS - 1; bin >= 0; bin--) if (table.envelopeKt[row + bin] >= limitKt) return binRadius(bin + 1);
-  return 0;
+  paths.perRootSize[at] = 1 / Math.sqrt(size);
+  const reach = (limitKt: number): number => (ratio > 0 ? reachKm(table, node, limitKt / ratio) * size : 0);
+  paths.reachKm[at] = reach(paths.limitKt);
+  paths.reachSin2[at] = Math.sin(Math.min(reach(WELL_UNDER * paths.limitKt) / EARTH_RADIUS_KM, Math.PI / 2)) ** 2;
 }
 
 const plain = (bytes: number): ArrayBufferLike => new ArrayBuffer(bytes);

@@ -5,6 +5,7 @@ import type { Sampled } from './tasks';
 
 /** Blocks a task takes: small enough that a newer advisory waits little, and that progress is seen. */
 const BLOCKS_PER_TASK = 2;
+const TILES_PER_TASK = 12;
 
 interface Parts {
   chunks: MemberChunk[];
@@ -16,8 +17,8 @@ interface Parts {
  * Answers come back in the order of the blocks, so the result does not depend on the number of threads.
  */
 export async function runMembers(pool: Pool, sampled: Sampled, exposure: ExposureHandle, check: () => void, progress: (done: number, of: number) => void): Promise<Parts> {
-  const ranges = rangesOf(exposure.targets.blocks.count);
-  const gridRanges = rangesOf(sampled.grid?.blocks.count ?? 0);
+  const ranges = rangesOf(exposure.targets.blocks.count, BLOCKS_PER_TASK);
+  const gridRanges = rangesOf(sampled.grid?.blocks.count ?? 0, TILES_PER_TASK);
   const of = ranges.length + gridRanges.length;
   const parts: Parts = { chunks: new Array(ranges.length), gridCounts: new Array(gridRanges.length) };
   let next = 0;
@@ -35,9 +36,9 @@ export async function runMembers(pool: Pool, sampled: Sampled, exposure: Exposur
   return parts;
 }
 
-function rangesOf(blocks: number): { firstBlock: number; lastBlock: number }[] {
-  return Array.from({ length: Math.ceil(blocks / BLOCKS_PER_TASK) }, (_, k) => ({
-    firstBlock: k * BLOCKS_PER_TASK,
-    lastBlock: Math.min(blocks, (k + 1) * BLOCKS_PER_TASK),
+function rangesOf(blocks: number, perTask: number): { firstBlock: number; lastBlock: number }[] {
+  return Array.from({ length: Math.ceil(blocks / perTask) }, (_, k) => ({
+    firstBlock: k * perTask,
+    lastBlock: Math.min(blocks, (k + 1) * perTask),
   }));
 }

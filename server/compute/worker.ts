@@ -1,6 +1,6 @@
 /** The compute thread's tasks. Plain functions: tests call them without a thread. */
 import { compileExposure, cornersOf, readLayer } from '../../lib/exposure';
-import { chanceOnGrid, forecastHazard, forecastPath, gridOver, gridPlaces, makeBlocks, memberHazard, memberPaths, nodeLeads, reachBox, tabulateStorm } from '../../lib/hazard';
+import { chanceOnGrid, forecastHazard, forecastPath, gridOver, gridPlaces, makeBlocks, memberHazard, memberPaths, nodeLeads, QUICKLY, reachBox, tabulateStorm, TILE_PLACES } from '../../lib/hazard';
 import type { MemberChunk, StormTable } from '../../lib/hazard';
 import { mergeChunks, tabulate } from '../../lib/impact';
 import { PUBLISHED_ERRORS, sampleMembers } from '../../lib/members';
@@ -21,7 +21,7 @@ const MEMBER_STEP_HOURS = 1;
 const MEMBER_LIMIT_KT = 28;
 const LAND_CELL_KM = 1;
 const SEA_CELL_KM = 4;
-const GRID_PLACES = 9_000;
+const GRID_PLACES = 6_000;
 const GRID_FINEST_KM = 8;
 
 /** Layers as stored, read again and put into typed arrays. Stored layers were read before, so one that fails is a fault. */
@@ -47,7 +47,7 @@ export function track({ advisory, exposure: handle, run, earlier }: TrackTask): 
   return { impact, hazard: shareArrays(hazard), bulk: { ...writeAssets(exposure, assets), ...swaths(table, run.issuedAtMs) } };
 }
 
-const SWATH_PLACES = 60_000;
+const SWATH_PLACES = 40_000;
 const SWATH_FINEST_KM = 3;
 /** The swath's grid must hold where 34 kt reaches, and a little beyond. */
 const SWATH_LIMIT_KT = 30;
@@ -56,7 +56,7 @@ function swaths(table: StormTable, issuedAtMs: number): Pick<TrackAnswer['bulk']
   const box = reachBox(forecastPath(table, SWATH_LIMIT_KT));
   const grid = box ? gridOver(box, SWATH_PLACES, SWATH_FINEST_KM) : gridOver({ west: 0, east: 1, south: 0, north: 1 }, 4, 100);
   const { places, gridIndex } = gridPlaces(grid);
-  const hazard = forecastHazard(table, places, makeBlocks(places, null));
+  const hazard = forecastHazard(table, places, makeBlocks(places, null, TILE_PLACES), QUICKLY, SWATH_LIMIT_KT);
   const lastLead = table.leadHours[table.leadHours.length - 1];
   return { peak: peakSwath(grid, gridIndex, hazard), arrival: arrivalSwath(grid, gridIndex, hazard, issuedAtMs, lastLead) };
 }
@@ -82,7 +82,7 @@ function chanceGrid(paths: Sampled['paths']): Sampled['grid'] {
   if (!box) return null;
   const grid = gridOver(box, GRID_PLACES, GRID_FINEST_KM);
   const { places, gridIndex } = gridPlaces(grid);
-  return { grid, places: shareArrays(places), blocks: shareArrays(makeBlocks(places, null)), gridIndex };
+  return { grid, places: shareArrays(places), blocks: shareArrays(makeBlocks(places, null, TILE_PLACES)), gridIndex };
 }
 
 export function chunk({ sampled, exposure, firstBlock, lastBlock }: ChunkTask): MemberChunk {
