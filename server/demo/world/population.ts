@@ -12,12 +12,12 @@ export interface Cell extends Km {
   people: number;
 }
 
-const STEP_KM = 0.75;
+const STEP_KM = 0.84;
 const TOTAL_PEOPLE = 2_400_000;
 /** How the people are shared out: in towns, along roads between them, and thinly over the rest. */
-const SHARES = { towns: 0.74, roads: 0.14, country: 0.12 };
+const SHARES = { towns: 0.8, roads: 0.13, country: 0.07 };
 
-/** People by cell of about 0.75 km: only where somebody lives. */
+/** People by cell of about 0.84 km: only where somebody lives. */
 export function makePopulation(terrain: Terrain, land: LandMask, towns: readonly Town[], roads: Roads, seed: number): Cell[] {
   const grid = gridOf(STEP_KM);
   const patch = octaves(makeNoise(seed), 5, 0.7);
@@ -33,7 +33,7 @@ export function makePopulation(terrain: Terrain, land: LandMask, towns: readonly
     kinds.push({ x, y });
     shares.towns.push(townPeople(towns, x + 1.3 * patch(x / 7 + 30, y / 7), y + 1.3 * patch(x / 7, y / 7 + 30)) * texture);
     shares.roads.push((0.08 + flat) * texture * Math.exp(-nearRoad(x, y) / 1.6));
-    shares.country.push(texture * (0.02 + flat) * (1 + 2 * Math.exp(-inland / 2.5)));
+    shares.country.push(texture ** 2.6 * (0.02 + flat) * (1 + 2 * Math.exp(-inland / 2.5)));
     return 0;
   });
   const scale = (values: number[], share: number): number => (share * TOTAL_PEOPLE) / values.reduce((sum, value) => sum + value, 0);
@@ -48,7 +48,7 @@ function townPeople(towns: readonly Town[], x: number, y: number): number {
   let sum = 0;
   for (const town of towns) {
     const away = Math.hypot(x - town.x, y - town.y);
-    const widthKm = 1.05 * (town.people / 10_000) ** 0.36;
+    const widthKm = 0.9 * (town.people / 10_000) ** 0.36;
     if (away > 14 * widthKm) continue;
     sum += (town.people / widthKm ** 2) * (0.75 * Math.exp(-away / widthKm) + 0.06 * Math.exp(-away / (2.6 * widthKm)));
   }

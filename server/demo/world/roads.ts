@@ -1,7 +1,8 @@
 import type { LandMask } from '../../../lib/geo';
 import { gridOf } from './frame';
 import type { Km } from './frame';
-import { inlandKm } from './places';
+import { mix } from './noise';
+import { inlandKm, SAFE_KM } from './places';
 import type { Town } from './places';
 import type { Terrain } from './terrain';
 
@@ -16,7 +17,9 @@ export interface Roads {
 }
 
 const STEP_KM = 1;
-const WATER_COST = 7;
+const WATER_COST = 4;
+/** Two roads over one water share its bridge. */
+const APART_KM = 2.5;
 const STEPS = [[1, 0], [-1, 0], [0, 1], [0, -1], [1, 1], [1, -1], [-1, 1], [-1, -1]] as const;
 
 /** Roads between towns: each to its nearest that the net does not hold yet, and cross-links where the way round is long. */
@@ -27,15 +30,16 @@ export function makeRoads(terrain: Terrain, land: LandMask, towns: readonly Town
   for (let i = 0; i < cost.length; i++) {
     const { x, y } = kmAt(i);
     inland[i] = inlandKm(land, x, y);
-    cost[i] = inland[i] > 0 ? 1 + terrain.heightM(x, y, inland[i]) / 180 : WATER_COST;
+    cost[i] = inland[i] > 0 ? 1 + terrain.heightM(x, y, inland[i]) / 70 : WATER_COST;
   }
   const lines: Km[][] = [];
   const crossings: Crossing[] = [];
   for (const [a, b] of links(towns.filter(({ isle }) => !isle))) {
     const cells = cheapestWay(cellOf(a), cellOf(b));
     for (const cell of cells) cost[cell] = Math.min(cost[cell], 0.45 * (inland[cell] > 0 ? 1 : WATER_COST));
-    lines.push(cells.map(kmAt));
-    crossings.push(...crossingsOf(cells));
+    const line = cells.map(kmAt);
+    lines.push(line);
+    for (const found of crossingsOf(land, line)) if (!crossings.some((other) => Math.hypot(other.x - found.x, other.y - found.y) < APART_KM)) crossings.push(found);
   }
   return { lines, crossings };
 
@@ -44,16 +48,6 @@ export function makeRoads(terrain: Terrain, land: LandMask, towns: readonly Town
   }
   function cellOf({ x, y }: Km): number {
     return Math.round((y - grid.south) / STEP_KM) * grid.columns + Math.round((x - grid.west) / STEP_KM);
-  }
-  function crossingsOf(cells: readonly number[]): Crossing[] {
-    const found: Crossing[] = [];
-    for (let k = 1; k < cells.length; k++) {
-      if (inland[cells[k]] > 0 || inland[cells[k - 1]] <= 0) continue;
-      let end = k;
-      while (end < cells.length && inland[cells[end]] <= 0) end++;
-      if (end < cells.length) found.push({ ...kmAt(cells[k - 1]), lengthKm: Math.hypot(kmAt(cells[end]).x - kmAt(cells[k - 1]).x, kmAt(cells[end]).y - kmAt(cells[k - 1]).y) });
-    }
-    return found;
   }
   /** Dijkstra (1959) over the grid, with the nearest open cells kept in buckets of cost. */
   function cheapestWay(from: number, to: number): number[] {
@@ -80,6 +74,26 @@ export function makeRoads(terrain: Terrain, land: LandMask, towns: readonly Town
   }
 }
 
+/** Where a road leaves land and comes ashore again, asked every quarter of a km. */
+function crossingsOf(land: LandMask, line: readonly Km[]): Crossing[] {
+  const found: Crossing[] = [];
+  let bank: Km | null = null;
+  let wet = false;
+  for (let k = 1; k < line.length; k++) {
+    for (let part = 0; part < 1; part += 0.25) {
+      const here = { x: mix(line[k - 1].x, line[k].x, part), y: mix(line[k - 1].y, line[k].y, part) };
+      if (inlandKm(land, here.x, here.y) < SAFE_KM) {
+        wet = true;
+        continue;
+      }
+      if (wet && bank) found.push({ ...bank, lengthKm: Math.hypot(here.x - bank.x, here.y - bank.y) });
+      wet = false;
+      bank = here;
+    }
+  }
+  return found;
+}
+
 function wayBack(back: Int32Array, to: number): number[] {
   const way = [to];
   while (back[way[way.length - 1]] >= 0) way.push(back[way[way.length - 1]]);
@@ -93,7 +107,7 @@ function links(towns: readonly Town[]): [Town, Town][] {
   const group = new Map(towns.map((town, i) => [town, i]));
   return pairs.filter(([a, b]) => {
     const [ga, gb] = [group.get(a)!, group.get(b)!];
-    if (ga === gb) return far(a, b) < 70 && !towns.some((c) => c !== a && c !== b && far(a, c) ** 2 + far(b, c) ** 2 < far(a, b) ** 2);
+    if (ga === gb) return far(a, b) < 95 && !towns.some((c) => c !== a && c !== b && far(a, c) ** 2 + far(b, c) ** 2 < far(a, b) ** 2);
     for (const [town, g] of group) if (g === gb) group.set(town, ga);
     return true;
   });

@@ -1,0 +1,78 @@
+import { bbox, booleanPointInPolygon } from '@turf/turf';
+import type { Feature, FeatureCollection, MultiPolygon, Polygon } from 'geojson';
+import type { LandMask } from '../../../lib/geo';
+import { placeOf } from './frame';
+import type { Km } from './frame';
+import type { Cell } from './population';
+import { inlandKm } from './places';
+import type { Town } from './places';
+import { squared } from './shapes';
+import type { Terrain } from './terrain';
+import { lowLand, shareOut } from './zoneShapes';
+
+const ZONES = 60;
+
+export type ZoneFeature = Feature<Polygon | MultiPolygon, { id: string; name: string; clearanceHours: number; clearanceSource: string }>;
+
+/** The city has more zones than towns: its docks and its north. */
+const QUARTERS: readonly (Km & { name: string })[] = [
+  { name: 'Ansel Docks', x: -7, y: -38 },
+  { name: 'Port Ansel N', x: -13, y: -8 },
+];
+
+/** Evacuation zones over the coastal and low land, each around a town or a village. */
+export function makeZones(terrain: Terrain, land: LandMask, coast: FeatureCollection<Polygon>, towns: readonly Town[], cells: readonly Cell[], names: Iterator<string, never>, seed: number): FeatureCollection<Polygon | MultiPolygon, ZoneFeature['properties']> {
+  const low = cells.filter(({ x, y }) => terrain.heightM(x, y, inlandKm(land, x, y)) < 18);
+  const seeds = seedsOf(towns, low, names);
+  const shapes = shareOut(lowLand(terrain, land, coast), seeds, seed);
+  return {
+    type: 'FeatureCollection',
+    features: shapes.map((geometry, i): ZoneFeature => {
+      const { name } = seeds[i];
+      return { type: 'Feature', properties: { id: `Z${String(i + 1).padStart(2, '0')}`, name, ...clearance(peopleIn(geometry, cells), wayOut(seeds[i], towns)) }, geometry };
+    }),
+  };
+}
+
+/** Towns near low ground, then the low place farthest from all so far, nearer ones counting more where people are dense. */
+function seedsOf(towns: readonly Town[], low: readonly Cell[], names: Iterator<string, never>): (Km & { name: string })[] {
+  const seeds: (Km & { name: string })[] = [...towns.filter((town) => low.some((cell) => squared(cell, town) < 9)), ...QUARTERS];
+  const away = low.map((cell) => Math.min(...seeds.map((other) => squared(cell, other))));
+  while (seeds.length < ZONES) {
+    let best = 0;
+    for (let i = 1; i < low.length; i++) if (away[i] * (low[i].people + 20) > away[best] * (low[best].people + 20)) best = i;
+    const { x, y } = low[best];
+    seeds.push({ name: names.next().value, x, y });
+    low.forEach((cell, i) => (away[i] = Math.min(away[i], squared(cell, low[best]))));
+  }
+  return seeds;
+}
+
+function peopleIn(geometry: Polygon | MultiPolygon, cells: readonly Cell[]): number {
+  const [west, south, east, north] = bbox(geometry);
+  return cells.reduce((sum, { x, y, people }) => {
+    const { lat, lon } = placeOf(x, y);
+    return lon >= west && lon <= east && lat >= south && lat <= north && booleanPointInPolygon([lon, lat], geometry) ? sum + people : sum;
+  }, 0);
+}
+
+type WayOut = 'ferry' | 'causeway' | 'road';
+
+const BARRIER_TOWNS = ['Orrin Bar', 'Culver Sands', 'Brackwater'];
+
+const wayOut = ({ name, x, y }: Km & { name: string }, towns: readonly Town[]): WayOut => {
+  const isle = towns.some((town) => town.isle && squared(town, { x, y }) < 30 ** 2);
+  return isle ? 'ferry' : BARRIER_TOWNS.includes(name) ? 'causeway' : 'road';
+};
+
+/** Hours to start moving, then queues: 600 vehicles an hour a lane were seen in real evacuations (TRB 90th annual meeting, 2011, paper 11-4115). */
+function clearance(people: number, way: WayOut): { clearanceHours: number; clearanceSource: string } {
+  const vehicles = (people * 0.7) / 2.5;
+  const lanes = way === 'causeway' ? 2 : 2 + Math.floor(people / 18_000);
+  const hours = 3 + vehicles / (600 * lanes) + (way === 'ferry' ? 5 : 0);
+  const by = way === 'ferry' ? 'with 5 h for ferries' : `on ${lanes} lanes out${way === 'causeway' ? ' by causeway' : ''}`;
+  return {
+    clearanceHours: Math.min(18, Math.max(3, Math.round(hours * 2) / 2)),
+    clearanceSource: `Exercise plan: 3 h to start, 70 % leave, 2.5 to a vehicle, 600 vehicles an hour a lane, ${by}`,
+  };
+}
