@@ -1,5 +1,5 @@
-import { byThreshold, THRESHOLD_KEYS } from '../units';
-import type { ByThreshold } from '../units';
+import { byThreshold } from '../units';
+import type { ByThreshold, ThresholdKey } from '../units';
 import type { Change, ClassRow, Impact, Spread, Totals, ZoneChange, ZoneRow } from './model';
 
 /** What an impact is compared with: the impact of the advisory before, at the same stage, and that advisory's number. */
@@ -46,7 +46,7 @@ function zoneChange(now: ZoneRow, before: ZoneRow | undefined, basis: Change['ba
   const difference = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : round2(a - b));
   const hours = (a: string | null, b: string | null): number | null => (a === null || b === null ? null : round2((Date.parse(a) - Date.parse(b)) / HOUR_MS));
   const moment = basis === 'members' ? 'median' : 'track';
-  const each = <T>(of: (key: (typeof THRESHOLD_KEYS)[number]) => T): ByThreshold<T> => byThreshold((_, kt) => of(`${kt}`));
+  const each = <T>(of: (key: ThresholdKey) => T): ByThreshold<T> => byThreshold((_, kt) => of(`${kt}`));
   return {
     maxWindKt: difference(now.maxWindKt, before.maxWindKt),
     people: spreadChange(now.peopleAtOrAbove, before.peopleAtOrAbove, basis),

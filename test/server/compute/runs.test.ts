@@ -2,7 +2,7 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pino } from 'pino';
-import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { afterAll, afterEach, beforeEach, describe, expect, test } from 'vitest';
 import type { Impact } from '../../../lib/impact';
 import type { RunFailed } from '../../../lib/wire';
 import { makeBus } from '../../../server/bus';
@@ -18,6 +18,8 @@ import { islandLayers, writeIsland } from './world';
 const folder = mkdtempSync(join(tmpdir(), 'leeboard-runs-'));
 const coast = join(folder, 'coast.geojson');
 writeIsland(coast);
+
+afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
 let store: OpenedStore;
 let bus: Bus;
