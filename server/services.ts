@@ -1,6 +1,7 @@
 import type { Logger } from 'pino';
 import type { AdvisoryNotice, Event, Identity, LogEntry, Progress, RunFailed } from '../lib/wire';
 import type { Impact } from '../lib/impact';
+import type { InspectTask, Inspection } from './compute/tasks';
 import type { Settings } from './settings';
 import type { EventRecord, Store } from './store/model';
 
@@ -54,6 +55,8 @@ export interface Services<A extends Auth = Auth> {
   bus: Bus;
   runs: Runs;
   clock: WallClock;
+  /** Reads a layer on a compute thread: good enough to store? */
+  inspectLayer(task: InspectTask): Promise<Inspection>;
   /** The event as screens see it, with its clock read now. */
   describeEvent(record: EventRecord): Promise<Event>;
 }

@@ -4,11 +4,12 @@ import { fileURLToPath } from 'node:url';
 import { Piscina } from 'piscina';
 import type { MemberChunk } from '../../lib/hazard';
 import type { ExposureHandle } from './exposureHandle';
-import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
+import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, InspectTask, Inspection, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
 
 /** The compute threads, as functions. */
 export interface Pool {
   readonly threads: number;
+  inspectLayer(task: InspectTask): Promise<Inspection>;
   compile(task: CompileTask): Promise<ExposureHandle>;
   track(task: TrackTask): Promise<TrackAnswer>;
   sample(task: SampleTask): Promise<Sampled>;
@@ -32,6 +33,7 @@ export function openPool(threads = Math.max(1, availableParallelism())): Pool {
       piscina.run(input, { name }) as Promise<R>;
   return {
     threads,
+    inspectLayer: task('inspectLayer'),
     compile: task('compile'),
     track: task('track'),
     sample: task('sample'),

@@ -1,5 +1,5 @@
 import type { Advisory } from '../../lib/advisory';
-import type { LayerKind } from '../../lib/exposure';
+import type { LayerKind, RowError } from '../../lib/exposure';
 import type { Blocks, Grid, MemberChunk, Paths, PlaceHazard, Places, StormTable } from '../../lib/hazard';
 import type { Earlier, Impact, RunParticulars } from '../../lib/impact';
 import type { BulkName } from '../store/model';
@@ -14,6 +14,15 @@ export interface LayerInput {
   contentType: string;
   fileName: string | null;
 }
+
+/** A layer not yet stored: is it good, and what is in it? */
+export interface InspectTask {
+  kind: LayerKind;
+  assetClass: string;
+  bytes: Uint8Array;
+}
+
+export type Inspection = { ok: true; rows: number; classes: { class: string; count: number }[]; rejected: RowError[] } | { ok: false; errors: RowError[] };
 
 export interface CompileTask {
   key: string;

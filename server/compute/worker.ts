@@ -5,6 +5,7 @@ import type { MemberChunk, StormTable } from '../../lib/hazard';
 import { mergeChunks, tabulate } from '../../lib/impact';
 import { PUBLISHED_ERRORS, sampleMembers } from '../../lib/members';
 import { makeTrack } from '../../lib/track';
+import { decodeText } from '../../lib/advisory';
 import type { Advisory } from '../../lib/advisory';
 import { surfaceOf } from '../../lib/wind';
 import { writeAssets } from './bulk';
@@ -13,7 +14,7 @@ import type { ExposureHandle } from './exposureHandle';
 import { boundsOf, landMask } from './land';
 import { arrivalSwath, chanceSwath, peakSwath } from './swath';
 import { shareArrays, sharedBytes } from './shared';
-import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
+import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, InspectTask, Inspection, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
 
 const TRACK_STEP_HOURS = 0.5;
 const MEMBER_STEP_HOURS = 1;
@@ -24,12 +25,23 @@ const SEA_CELL_KM = 4;
 const GRID_PLACES = 6_000;
 const GRID_FINEST_KM = 8;
 
+/** Reads a layer to say whether it may be stored: large files are parsed here, away from the event loop. */
+export function inspectLayer({ kind, assetClass, bytes }: InspectTask): Inspection {
+  const decoded = decodeText(bytes);
+  if (!decoded.ok) return { ok: false, errors: [{ row: 1, message: decoded.message }] };
+  const reading = readLayer(decoded.text, { kind, assetClass });
+  if (!reading.ok) return reading;
+  const counts = new Map<string, number>();
+  if (reading.data.kind === 'assets') for (const asset of reading.data.assets) counts.set(asset.class, (counts.get(asset.class) ?? 0) + 1);
+  return { ok: true, rows: reading.accepted, classes: Array.from(counts, ([name, count]) => ({ class: name, count })), rejected: reading.rejected };
+}
+
 /** Layers as stored, read again and put into typed arrays. Stored layers were read before, so one that fails is a fault. */
 export function compile({ key, layers, coastFile }: CompileTask): ExposureHandle {
-  const decoder = new TextDecoder();
   const read = layers.map((layer) => {
-    const reading = readLayer(decoder.decode(layer.bytes), { kind: layer.kind, fileName: layer.fileName ?? undefined, contentType: layer.contentType, assetClass: layer.name });
-    if (!reading.ok) throw new Error(`Layer ${layer.name} (${layer.id}) was stored but cannot be read: ${reading.errors[0]?.message}`);
+    const decoded = decodeText(layer.bytes);
+    const reading = decoded.ok ? readLayer(decoded.text, { kind: layer.kind, assetClass: layer.name }) : null;
+    if (!reading?.ok) throw new Error(`Layer ${layer.name} (${layer.id}) was stored but cannot be read: ${reading?.errors[0]?.message ?? 'not text'}`);
     return { layerId: layer.id, data: reading.data };
   });
   const corners = read.flatMap(({ data }) => cornersOf(data));

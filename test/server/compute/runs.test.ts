@@ -8,7 +8,7 @@ import type { RunFailed } from '../../../lib/wire';
 import { makeBus } from '../../../server/bus';
 import { openRuns } from '../../../server/compute/runs';
 import type { Pool } from '../../../server/compute/pool';
-import { assemble, chunk, compile, gridChunk, sample, track } from '../../../server/compute/worker';
+import { assemble, chunk, compile, gridChunk, inspectLayer, sample, track } from '../../../server/compute/worker';
 import type { Bus, Runs } from '../../../server/services';
 import { openStore } from '../../../server/store';
 import type { OpenedStore } from '../../../server/store';
@@ -30,6 +30,7 @@ let dataDir: string;
 
 const here: Pool = {
   threads: 1,
+  inspectLayer: async (task) => inspectLayer(task),
   compile: async (task) => compile(task),
   track: async (task) => track(task),
   sample: async (task) => sample(task),

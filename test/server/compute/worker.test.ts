@@ -6,7 +6,7 @@ import { booleanPointInPolygon } from '@turf/turf';
 import type { FeatureCollection, MultiPolygon } from 'geojson';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { openAssets, pageOfAssets } from '../../../server/compute/bulk';
-import { assemble, chunk, compile, gridChunk, sample, track } from '../../../server/compute/worker';
+import { assemble, chunk, compile, gridChunk, inspectLayer, sample, track } from '../../../server/compute/worker';
 import { openPool } from '../../../server/compute/pool';
 import type { Pool } from '../../../server/compute/pool';
 import { runMembers } from '../../../server/compute/runMembers';
@@ -27,6 +27,7 @@ const read = (bytes: Uint8Array | undefined) => JSON.parse(gunzipSync(bytes!).to
 /** The same tasks without threads. */
 const here: Pool = {
   threads: 1,
+  inspectLayer: async (task) => inspectLayer(task),
   compile: async (task) => compile(task),
   track: async (task) => track(task),
   sample: async (task) => sample(task),
