@@ -72,7 +72,7 @@ export function makeKnots(points: Point[], leadHours: Float64Array, motion: Moti
     inferred: {
       radiusMaxWind: point.radiusMaxWindNm === undefined,
       pressure: point.minPressureHpa === undefined,
-      radii: byThreshold((t) => !given?.[t][i]),
+      radii: byThreshold((t, kt) => winds[i] >= kt * oneMinute && !given?.[t][i]),
     },
   }));
 }

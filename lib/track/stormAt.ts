@@ -35,7 +35,7 @@ export interface StormState {
   maxWindKt: number;
   minPressureHpa: number;
   radiusMaxWindKm: number;
-  /** Greatest distance (NE SE SW NW) of the advisory's 34, 50 and 64 kt; 0 where not reached; null where the advisory has no radii at all. */
+  /** Greatest distance (NE SE SW NW) of the advisory's 34, 50 and 64 kt; 0 where not reached; null where it is reached and the advisory has no radii at all. */
   radiiKm: ByThreshold<QuadrantKm | null>;
   /** What the wind profile goes through; null where the advisory has no radii at all. */
   structure: StormStructure | null;
@@ -63,8 +63,8 @@ export function stormAt(track: Track, leadHours: number): StormState | null {
     maxWindKt,
     minPressureHpa: a === b ? a.minPressureHpa : hermite(fraction, hours, a.minPressureHpa, b.minPressureHpa, pressureSlopes[leg], pressureSlopes[leg + 1]),
     radiusMaxWindKm,
-    radiiKm: byThreshold((t) => {
-      if (!structure) return null;
+    radiiKm: byThreshold((t, kt) => {
+      if (!structure) return maxWindKt < kt * track.oneMinute ? [0, 0, 0, 0] : null;
       const { windKt, radiiKm } = structure.rings[2 - t];
       return map(radiiKm, (km, q) => (structure.peaksKt[q] >= windKt ? km : 0));
     }),
