@@ -32,7 +32,7 @@ export function makeCoast(terrain: Terrain): FeatureCollection<Polygon> {
   return { type: 'FeatureCollection', features: polygons.map((rings): Feature<Polygon> => ({ type: 'Feature', properties: {}, geometry: { type: 'Polygon', coordinates: rings.map(inDegrees) } })) };
 }
 
-/** Polygons where a field is above a level, in km; outer ring first, counter-clockwise in x and y. */
+/** Polygons where a field is above a level, in km; outer ring first. */
 export function contourKm({ west, south, stepKm, columns, rows }: Grid, field: Float64Array, level: number): Position[][][] {
   const { coordinates } = contours().size([columns, rows]).contour(field as unknown as number[], level);
   // A sample stands for a pixel half a step across in d3-contour.

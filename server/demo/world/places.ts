@@ -17,11 +17,11 @@ const MAINLAND: readonly Row[] = [
   ['Port Ansel W', -15, -28, 262, 1],
   ['Port Ansel E', 2, -19, 214, 1],
   ['Saltmarsh', -37, -37, 62, 2],
-  ['Orrin Bar', 30, -60, 34, 2],
-  ['Brackwater', -18, -49, 22, 3],
+  ['Orrin Bar', 30, -60, 66, 2],
+  ['Brackwater', -18, -49, 26, 3],
   ['Hale Point', 43, -50, 27, 2],
   ['Tarn Valley', -32, 16, 66, 2],
-  ['Westering', -152, -4, 88, 2],
+  ['Westering', -163, -2, 92, 2],
   ['Fell Head', 22, 92, 14, 3],
   ['Marrick Haven', 98, 36, 104, 2],
   ['Sallow Quay', 70, -20, 78, 2],
@@ -34,7 +34,7 @@ const MAINLAND: readonly Row[] = [
   ['Stonnard', -106, -14, 52, 2],
   ['Osier Gate', -54, -46, 44, 3],
   ['Long Tern', -78, -63, 9, 4],
-  ['Culver Sands', 92, -38, 13, 3],
+  ['Culver Sands', 92, -38, 22, 3],
   ['Skarne', 118, -6, 38, 3],
   ['Brindle Ford', 92, 8, 29, 3],
   ['Nether Quill', -92, -38, 31, 3],
@@ -46,8 +46,8 @@ const MAINLAND: readonly Row[] = [
   ['Easter Cove', 132, 24, 28, 3],
 ];
 const ISLES: readonly Row[] = [
-  ['Outer Lamb', 196, 34, 9, 3],
-  ['Inner Lamb', 184, -10, 3, 4],
+  ['Outer Lamb', 196, 34, 4, 3],
+  ['Inner Lamb', 184, -10, 2, 4],
   ['Wether Isle', -186, -48, 21, 3],
   ['Norrow', 4, 116, 5, 4],
   ['Little Pell', 76, 112, 3, 4],
@@ -76,7 +76,7 @@ export function ashore(land: LandMask, wish: Km): Km {
 
 export const inlandKm = (land: LandMask, x: number, y: number): number => land.coastDistanceKm(latOf(y), lonOf(x));
 
-const FIRST = ['Alder', 'Bracken', 'Cinder', 'Drift', 'Ember', 'Fallow', 'Gorse', 'Hobb', 'Ivy', 'Juniper', 'Kelp', 'Lark', 'Mallow', 'Nettle', 'Otter', 'Plover', 'Quern', 'Rush', 'Sedge', 'Thrift', 'Umber', 'Vetch', 'Whin', 'Yarrow', 'Curlew', 'Teasel', 'Samphire', 'Withy'];
+const FIRST = ['Alder', 'Bracken', 'Cinder', 'Drift', 'Ember', 'Fallow', 'Gorse', 'Hobb', 'Ivy', 'Sorrel', 'Kelp', 'Lark', 'Mallow', 'Nettle', 'Otter', 'Plover', 'Quern', 'Rush', 'Sedge', 'Thrift', 'Umber', 'Vetch', 'Whin', 'Yarrow', 'Curlew', 'Teasel', 'Tansy', 'Withy'];
 const LAST = ['wick', 'stead', ' Ness', 'holme', ' Strand', 'combe', ' Hythe', ' Gate', ' Pool', ' Fleet', 'garth', ' Reach', ' Landing', ' Creek', 'marsh'];
 
 /** Invented names, none given twice, in a fixed order that mixes beginnings and ends. */

@@ -23,7 +23,7 @@ export function lowLand(terrain: Terrain, land: LandMask, coast: FeatureCollecti
     return inland <= 0 ? LOW_M : LOW_M - terrain.heightM(x, y, inland);
   });
   const patches = contourKm(grid, lowness, 0)
-    .filter(([outer]) => ringAreaKm2(outer) > LEAST_PATCH_KM2)
+    .filter(([outer]) => Math.abs(ringAreaKm2(outer)) > LEAST_PATCH_KM2)
     .map((rings) => rings.filter((ring) => Math.abs(ringAreaKm2(ring)) > LEAST_PATCH_KM2).map((ring) => inDegrees(thinned(ring, 0.2))));
   const low = feature<MultiPolygon>({ type: 'MultiPolygon', coordinates: patches });
   return coast.features.flatMap((island) => intersect(featureCollection<Polygon | MultiPolygon>([island, low])) ?? []);

@@ -37,7 +37,8 @@ export function makeZones(terrain: Terrain, land: LandMask, coast: FeatureCollec
 /** Towns near low ground, then the low place farthest from all so far, nearer ones counting more where people are dense. */
 function seedsOf(towns: readonly Town[], low: readonly Cell[], names: Iterator<string, never>): (Km & { name: string })[] {
   const seeds: (Km & { name: string })[] = [...towns.filter((town) => low.some((cell) => squared(cell, town) < 9)), ...QUARTERS];
-  const away = low.map((cell) => Math.min(...seeds.map((other) => squared(cell, other))));
+  // A small island is one zone.
+  const away = low.map((cell) => (onIsle(cell, towns) ? 0 : Math.min(...seeds.map((other) => squared(cell, other)))));
   while (seeds.length < ZONES) {
     let best = 0;
     for (let i = 1; i < low.length; i++) if (away[i] * (low[i].people + 20) > away[best] * (low[best].people + 20)) best = i;
@@ -56,23 +57,23 @@ function peopleIn(geometry: Polygon | MultiPolygon, cells: readonly Cell[]): num
   }, 0);
 }
 
+const onIsle = (place: Km, towns: readonly Town[]): boolean => towns.some((town) => town.isle && squared(town, place) < 27 ** 2);
+
 type WayOut = 'ferry' | 'causeway' | 'road';
 
-const BARRIER_TOWNS = ['Orrin Bar', 'Culver Sands', 'Brackwater'];
+/** Towns that one low road leads out of. */
+const CAUSEWAYS = ['Orrin Bar', 'Culver Sands', 'Brackwater', 'Saltmarsh'];
 
-const wayOut = ({ name, x, y }: Km & { name: string }, towns: readonly Town[]): WayOut => {
-  const isle = towns.some((town) => town.isle && squared(town, { x, y }) < 30 ** 2);
-  return isle ? 'ferry' : BARRIER_TOWNS.includes(name) ? 'causeway' : 'road';
-};
+const wayOut = (seed: Km & { name: string }, towns: readonly Town[]): WayOut => (onIsle(seed, towns) ? 'ferry' : CAUSEWAYS.includes(seed.name) ? 'causeway' : 'road');
 
 /** Hours to start moving, then queues: 600 vehicles an hour a lane were seen in real evacuations (TRB 90th annual meeting, 2011, paper 11-4115). */
 function clearance(people: number, way: WayOut): { clearanceHours: number; clearanceSource: string } {
-  const vehicles = (people * 0.7) / 2.5;
-  const lanes = way === 'causeway' ? 2 : 2 + Math.floor(people / 18_000);
-  const hours = 3 + vehicles / (600 * lanes) + (way === 'ferry' ? 5 : 0);
-  const by = way === 'ferry' ? 'with 5 h for ferries' : `on ${lanes} lanes out${way === 'causeway' ? ' by causeway' : ''}`;
+  const start = people < 10_000 ? 2.5 : 4;
+  const lanes = way === 'causeway' ? (people > 40_000 ? 3 : 2) : 2 + Math.floor(people / 26_000);
+  const hours = start + (people * 0.7) / 2.5 / (600 * lanes) + (way === 'ferry' ? 5 : 0);
+  const by = way === 'ferry' ? 'and 5 h for ferries' : `${lanes} lanes out${way === 'causeway' ? ' by causeway' : ''}`;
   return {
     clearanceHours: Math.min(18, Math.max(3, Math.round(hours * 2) / 2)),
-    clearanceSource: `Exercise plan: 3 h to start, 70 % leave, 2.5 to a vehicle, 600 vehicles an hour a lane, ${by}`,
+    clearanceSource: `Exercise plan: ${start} h to start, 70 % leave, 2.5 to a vehicle, 600 vehicles an hour a lane, ${by}`,
   };
 }
