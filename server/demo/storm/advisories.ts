@@ -19,16 +19,18 @@ const EXTRATROPICAL_FROM_LAT = 34;
  * One to three take the storm slowly to the west, four and five bring it to the estuary, stronger and sooner; six slows it.
  */
 const ERRORS = [
-  { pace: 0.76, westDeg: 1.75, tooWeakKt: 25, pressureHpa: 994 },
-  { pace: 0.78, westDeg: 1.85, tooWeakKt: 20, pressureHpa: 988 },
-  { pace: 0.8, westDeg: 1.55, tooWeakKt: 15, pressureHpa: 981 },
-  { pace: 0.94, westDeg: 0.55, tooWeakKt: 5, pressureHpa: 971 },
-  { pace: 1.08, westDeg: 0.05, tooWeakKt: -5, pressureHpa: 961 },
+  { pace: 0.87, westDeg: 1.75, tooWeakKt: 25, pressureHpa: 994 },
+  { pace: 0.93, westDeg: 1.85, tooWeakKt: 20, pressureHpa: 988 },
+  { pace: 0.985, westDeg: 1.55, tooWeakKt: 15, pressureHpa: 981 },
+  { pace: 1.06, westDeg: 0.55, tooWeakKt: 5, pressureHpa: 971 },
+  { pace: 1.12, westDeg: 0.05, tooWeakKt: -5, pressureHpa: 961 },
   { pace: 0.86, westDeg: -0.1, tooWeakKt: 0, pressureHpa: 956 },
   { pace: 0.94, westDeg: 0.15, tooWeakKt: 0, pressureHpa: 951, eyeDiameterNm: 25 },
   { pace: 1, westDeg: 0, tooWeakKt: 0, pressureHpa: 950, eyeDiameterNm: 20 },
 ];
 const LANDFALL_HOUR = 42;
+/** It stays a storm to the end. */
+const LEAST_WIND_KT = 35;
 
 /** The eight advisories of the storm, in order, as a bulletin can carry them. */
 export function makeAdvisories(): Advisory[] {
@@ -59,7 +61,7 @@ function pointAt(track: Track, i: number, hour: number, leadHours: number): Poin
   const centre = centreAt(track, along)!;
   const landfallAfter = (LANDFALL_HOUR - issued) / pace;
   const share = landfallAfter > 0 ? Math.min(1.4, after / landfallAfter) : 0;
-  const maxWindKt = five(stormAt(track, along)!.maxWindKt - tooWeakKt * Math.min(1, share));
+  const maxWindKt = Math.max(LEAST_WIND_KT, five(stormAt(track, along)!.maxWindKt - tooWeakKt * Math.min(1, share)));
   const radiiNm = ringsOf(maxWindKt, along, leadHours);
   return {
     validAt: instantAt(hour),

@@ -69,9 +69,9 @@ const wayOut = (seed: Km & { name: string }, towns: readonly Town[]): WayOut => 
 /** Hours to start moving, then queues: 600 vehicles an hour a lane were seen in real evacuations (TRB 90th annual meeting, 2011, paper 11-4115). */
 function clearance(people: number, way: WayOut): { clearanceHours: number; clearanceSource: string } {
   const start = people < 10_000 ? 2.5 : 4;
-  const lanes = way === 'causeway' ? (people > 40_000 ? 3 : 2) : 2 + Math.floor(people / 26_000);
-  const hours = start + (people * 0.7) / 2.5 / (600 * lanes) + (way === 'ferry' ? 5 : 0);
-  const by = way === 'ferry' ? 'and 5 h for ferries' : `${lanes} lanes out${way === 'causeway' ? ' by causeway' : ''}`;
+  const lanes = way === 'causeway' ? 2 : 2 + Math.floor(people / 26_000);
+  const hours = start + (people * 0.7) / 2.5 / (600 * lanes) + (way === 'ferry' ? 7 : 0);
+  const by = way === 'ferry' ? 'and 7 h for ferries' : `${lanes} lanes out${way === 'causeway' ? ' by causeway' : ''}`;
   return {
     clearanceHours: Math.min(18, Math.max(3, Math.round(hours * 2) / 2)),
     clearanceSource: `Exercise plan: ${start} h to start, 70 % leave, 2.5 to a vehicle, 600 vehicles an hour a lane, ${by}`,
