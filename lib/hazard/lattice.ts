@@ -4,12 +4,16 @@ import type { Blocks, Places } from './blocks';
 /**
  * Corners of a square lattice laid over a block of places in the plane that touches the sphere at the block's centre. Winds of a
  * member vary little over a few kilometres, so they are computed at the corners and read off between them: place `i` of the block
- * takes `weight[4 i + k]` of corner `corner[4 i + k]`. Only corners that some place needs are kept.
+ * lies in square `square[i]` and takes `weight[4 i + k]` of that square's corner `corner[4 square + k]`. Only squares that hold a
+ * place are kept.
  */
 export interface Lattice {
+  /** Corners, as unit vectors. */
   count: number;
   xyz: Float64Array;
+  squares: number;
   corner: Uint32Array;
+  square: Uint32Array;
   weight: Float32Array;
 }
 
@@ -21,45 +25,53 @@ export function makeLattice(places: Places, blocks: Blocks, block: number, spaci
   const x0 = Math.min(...x);
   const y0 = Math.min(...y);
   const columns = Math.floor((Math.max(...x) - x0) / step) + 2;
-  const number = new Map<number, number>();
-  const corner = new Uint32Array(count * 4);
+  const cornerOf = new Map<number, number>();
+  const squareOf = new Map<number, number>();
+  const corner: number[] = [];
+  const square = new Uint32Array(count);
   const weight = new Float32Array(count * 4);
   for (let i = 0; i < count; i++) {
     const u = (x[i] - x0) / step;
     const v = (y[i] - y0) / step;
     const column = Math.floor(u);
     const row = Math.floor(v);
+    const cell = row * columns + column;
+    if (!squareOf.has(cell)) {
+      squareOf.set(cell, squareOf.size);
+      for (let k = 0; k < 4; k++) {
+        const at = cell + (k >> 1) * columns + (k & 1);
+        if (!cornerOf.has(at)) cornerOf.set(at, cornerOf.size);
+        corner.push(cornerOf.get(at)!);
+      }
+    }
+    square[i] = squareOf.get(cell)!;
     const fx = u - column;
     const fy = v - row;
-    const weights = [(1 - fx) * (1 - fy), fx * (1 - fy), (1 - fx) * fy, fx * fy];
-    for (let k = 0; k < 4; k++) {
-      const cell = (row + (k >> 1)) * columns + column + (k & 1);
-      let at = number.get(cell);
-      if (at === undefined) number.set(cell, (at = number.size));
-      corner[i * 4 + k] = at;
-      weight[i * 4 + k] = weights[k];
-    }
+    weight.set([(1 - fx) * (1 - fy), fx * (1 - fy), (1 - fx) * fy, fx * fy], i * 4);
   }
   // Where places are sparser than corners, each is a corner of its own.
-  if (number.size >= count) return ownCorners(places, from, count);
-  const xyz = new Float64Array(number.size * 3);
-  for (const [cell, at] of number) {
+  if (cornerOf.size >= count) return ownCorners(places, from, count);
+  const xyz = new Float64Array(cornerOf.size * 3);
+  for (const [cell, at] of cornerOf) {
     const px = x0 + (cell % columns) * step;
     const py = y0 + Math.floor(cell / columns) * step;
     const pz = Math.sqrt(1 - px * px - py * py);
     for (let axis = 0; axis < 3; axis++) xyz[at * 3 + axis] = px * frame.east[axis] + py * frame.north[axis] + pz * frame.up[axis];
   }
-  return { count: number.size, xyz, corner, weight };
+  return { count: cornerOf.size, xyz, squares: squareOf.size, corner: Uint32Array.from(corner), square, weight };
 }
 
 function ownCorners(places: Places, from: number, count: number): Lattice {
-  const corner = new Uint32Array(count * 4);
   const weight = new Float32Array(count * 4);
-  for (let i = 0; i < count; i++) {
-    corner.fill(i, i * 4, i * 4 + 4);
-    weight[i * 4] = 1;
-  }
-  return { count, xyz: places.xyz.slice(from * 3, (from + count) * 3), corner, weight };
+  for (let i = 0; i < count; i++) weight[i * 4] = 1;
+  return {
+    count,
+    xyz: places.xyz.slice(from * 3, (from + count) * 3),
+    squares: count,
+    corner: Uint32Array.from({ length: count * 4 }, (_, at) => at >> 2),
+    square: Uint32Array.from({ length: count }, (_, i) => i),
+    weight,
+  };
 }
 
 /** Components of a block's places along two directions square to the block's centre, in earth radii. */

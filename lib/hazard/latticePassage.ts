@@ -5,11 +5,12 @@ import type { Passage } from './passage';
 
 /**
  * One member over the corners of a lattice, read off at the places between them. Corners carry the peak over water and, for each
- * surface that stands on the block, first and last time of each threshold; a threshold that only some of a place's corners reach
- * takes its times from those.
+ * surface that stands on the block, first and last time of each threshold. A square says how many thresholds all its corners
+ * reach, and how many some do: most places are then settled without reading a wind. A threshold that only some of a place's corners
+ * reach takes its times from those.
  */
 export class LatticePassage {
-  /** The answer of the last `at`: thresholds reached (0 to 3), and times (lead hours) of those. */
+  /** Times (lead hours) of the thresholds that the last `at` found reached. */
   readonly arrival = new Float64Array(3);
   readonly end = new Float64Array(3);
 
@@ -23,20 +24,31 @@ export class LatticePassage {
   /** `[(corner * surfaces + surface) * 3 + t]`, NaN for never. */
   private readonly arrivals: Float32Array;
   private readonly ends: Float32Array;
+  /** `[square * surfaces + surface]`: thresholds reached at every corner, and at any. */
+  private readonly everywhere: Uint8Array;
+  private readonly anywhere: Uint8Array;
+  /** `[(square * surfaces + surface) * 3 + t]`: no place in the square is reached sooner, or left later. */
+  private readonly soonest: Float32Array;
+  private readonly latest: Float32Array;
 
   constructor(lattice: Lattice, passage: Passage, places: Places, from: number, to: number) {
     this.lattice = lattice;
     this.passage = passage;
     const factors = [...new Set(places.surfaceFactor.subarray(from, to))].sort((a, b) => b - a);
-    this.surfaces = factors.length;
+    const surfaces = factors.length;
+    this.surfaces = surfaces;
     this.surfaceOf = Uint8Array.from(places.surfaceFactor.subarray(from, to), (factor) => factors.indexOf(factor));
     this.kt = Float64Array.from(factors.flatMap((factor) => THRESHOLDS_KT.map((kt) => kt / factor)));
     this.peak = new Float32Array(lattice.count);
-    this.arrivals = new Float32Array(lattice.count * factors.length * 3);
-    this.ends = new Float32Array(lattice.count * factors.length * 3);
+    this.arrivals = new Float32Array(lattice.count * surfaces * 3);
+    this.ends = new Float32Array(lattice.count * surfaces * 3);
+    this.everywhere = new Uint8Array(lattice.squares * surfaces);
+    this.anywhere = new Uint8Array(lattice.squares * surfaces);
+    this.soonest = new Float32Array(lattice.squares * surfaces * 3);
+    this.latest = new Float32Array(lattice.squares * surfaces * 3);
   }
 
-  /** Member `member` over all corners, nodes `first` to `last`. False: no corner reaches the paths' limit. */
+  /** Member `member` over all corners, nodes `first` to `last`. False: it reaches no threshold at any corner. */
   over(member: number, first: number, last: number): boolean {
     const { lattice, passage, surfaces, kt } = this;
     let any = false;
@@ -54,34 +66,81 @@ export class LatticePassage {
         }
       }
     }
+    if (any) this.settleSquares();
     return any;
   }
 
-  /** How many thresholds the member reaches at place `i` of the block (0 to 3); fills their times. */
-  at(i: number): number {
-    const { lattice, peak, kt, surfaces } = this;
-    const { corner, weight } = lattice;
-    const o = i * 4;
-    const wind = weight[o] * peak[corner[o]] + weight[o + 1] * peak[corner[o + 1]] + weight[o + 2] * peak[corner[o + 2]] + weight[o + 3] * peak[corner[o + 3]];
-    const surface = this.surfaceOf[i];
-    let t = 0;
-    for (; t < 3 && wind >= kt[surface * 3 + t]; t++) {
-      let sum = 0;
-      let arrival = 0;
-      let end = 0;
-      for (let k = 0; k < 4; k++) {
-        const at = (corner[o + k] * surfaces + surface) * 3 + t;
-        const time = this.arrivals[at];
-        if (time !== time) continue;
-        const w = weight[o + k];
-        sum += w;
-        arrival += w * time;
-        end += w * this.ends[at];
+  private settleSquares(): void {
+    const { lattice, surfaces, arrivals, ends } = this;
+    for (let q = 0; q < lattice.squares; q++) {
+      for (let s = 0; s < surfaces; s++) {
+        let everywhere = 0;
+        let anywhere = 0;
+        for (let t = 0; t < 3; t++) {
+          let reached = 0;
+          let soonest = Infinity;
+          let latest = -Infinity;
+          for (let k = 0; k < 4; k++) {
+            const at = (lattice.corner[q * 4 + k] * surfaces + s) * 3 + t;
+            if (arrivals[at] !== arrivals[at]) continue;
+            reached++;
+            if (arrivals[at] < soonest) soonest = arrivals[at];
+            if (ends[at] > latest) latest = ends[at];
+          }
+          if (reached === 4) everywhere = t + 1;
+          if (reached > 0) anywhere = t + 1;
+          this.soonest[(q * surfaces + s) * 3 + t] = soonest;
+          this.latest[(q * surfaces + s) * 3 + t] = latest;
+        }
+        this.everywhere[q * surfaces + s] = everywhere;
+        this.anywhere[q * surfaces + s] = anywhere;
       }
-      if (sum === 0) break;
-      this.arrival[t] = arrival / sum;
-      this.end[t] = end / sum;
     }
+  }
+
+  /** How many thresholds the member reaches at place `i` of the block, 0 to 3. */
+  reachedAt(i: number): number {
+    const { lattice, peak, kt, surfaces } = this;
+    const surface = this.surfaceOf[i];
+    const q = lattice.square[i];
+    const most = this.anywhere[q * surfaces + surface];
+    let t = this.everywhere[q * surfaces + surface];
+    if (t === most) return t;
+    const { corner, weight } = lattice;
+    const c = q * 4;
+    const w = i * 4;
+    const wind = weight[w] * peak[corner[c]] + weight[w + 1] * peak[corner[c + 1]] + weight[w + 2] * peak[corner[c + 2]] + weight[w + 3] * peak[corner[c + 3]];
+    while (t < most && wind >= kt[surface * 3 + t]) t++;
     return t;
+  }
+
+  /** Whether times at place `i` could lie outside `arrival` to `end`: a quick look that spares most of `timesAt`. */
+  mayWiden(i: number, t: number, arrival: number, end: number): boolean {
+    const at = (this.lattice.square[i] * this.surfaces + this.surfaceOf[i]) * 3 + t;
+    return this.soonest[at] < arrival || this.latest[at] > end;
+  }
+
+  /** Fills `arrival[t]` and `end[t]` for a threshold reached at place `i`. */
+  timesAt(i: number, t: number): void {
+    const { lattice, surfaces, arrivals, ends } = this;
+    const surface = this.surfaceOf[i];
+    const c = lattice.square[i] * 4;
+    const w = i * 4;
+    let sum = 0;
+    let arrival = 0;
+    let end = 0;
+    for (let k = 0; k < 4; k++) {
+      const at = (lattice.corner[c + k] * surfaces + surface) * 3 + t;
+      const time = arrivals[at];
+      if (time !== time) continue;
+      const weight = lattice.weight[w + k];
+      sum += weight;
+      arrival += weight * time;
+      end += weight * ends[at];
+    }
+    // Between a corner that is reached and three that are not, weights can vanish: then the square's own times stand in.
+    const square = (lattice.square[i] * surfaces + surface) * 3 + t;
+    this.arrival[t] = sum > 1e-6 ? arrival / sum : this.soonest[square];
+    this.end[t] = sum > 1e-6 ? end / sum : this.latest[square];
   }
 }

@@ -24,7 +24,7 @@ export interface Targets {
 }
 
 /** Spacing of the lattice on which a member's wind is computed; places between its corners take it from there. */
-const LATTICE_KM = 4;
+const LATTICE_KM = 5;
 
 /** Early, median and late arrival, then early, median and late end. */
 export const MOMENTS = 6;
@@ -103,22 +103,23 @@ export function memberHazard(table: StormTable, paths: Paths, targets: Targets, 
           assetArrival.fill(Infinity);
           assetEnd.fill(-Infinity);
         }
-        const reached = lattice.at(i - from);
+        const reached = lattice.reachedAt(i - from);
         for (let t = 0; t < reached; t++) {
-          const arrival = lattice.arrival[t];
-          const end = lattice.end[t];
           if (owner >= 0) {
-            if (arrival < assetArrival[t]) assetArrival[t] = arrival;
-            if (end > assetEnd[t]) assetEnd[t] = end;
+            if (!lattice.mayWiden(i - from, t, assetArrival[t], assetEnd[t])) continue;
+            lattice.timesAt(i - from, t);
+            if (lattice.arrival[t] < assetArrival[t]) assetArrival[t] = lattice.arrival[t];
+            if (lattice.end[t] > assetEnd[t]) assetEnd[t] = lattice.end[t];
             continue;
           }
           chunk.milliPeople[t * members + m] += milliPeople[i];
-          if (zone[i] >= 0) {
-            const z = (slotOf[zone[i]] * 3 + t) * members + m;
-            chunk.zoneMilliPeople[z] += milliPeople[i];
-            if (arrival < chunk.zoneArrival[z]) chunk.zoneArrival[z] = arrival;
-            if (end > chunk.zoneEnd[z]) chunk.zoneEnd[z] = end;
-          }
+          if (zone[i] < 0) continue;
+          const z = (slotOf[zone[i]] * 3 + t) * members + m;
+          chunk.zoneMilliPeople[z] += milliPeople[i];
+          if (!lattice.mayWiden(i - from, t, chunk.zoneArrival[z], chunk.zoneEnd[z])) continue;
+          lattice.timesAt(i - from, t);
+          if (lattice.arrival[t] < chunk.zoneArrival[z]) chunk.zoneArrival[z] = lattice.arrival[t];
+          if (lattice.end[t] > chunk.zoneEnd[z]) chunk.zoneEnd[z] = lattice.end[t];
         }
         if (closes) {
           for (let t = 0; t < 3 && assetArrival[t] < Infinity; t++) {

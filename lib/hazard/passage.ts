@@ -6,6 +6,7 @@ import type { StormTable } from './stormTable';
 
 /** The core reaches to twice the radius of maximum wind; distances here are roots, in radii of maximum wind. */
 const CORE_ROOT = Math.SQRT2;
+const EDGE_STEPS = 2;
 
 /** How closely a passage is looked at. */
 export interface Care {
@@ -17,9 +18,9 @@ export interface Care {
 }
 
 /** For the forecast: every place, once. */
-export const CLOSELY: Care = { coreCuts: 6, closeKt: 0.01, mostSteps: 8 };
+export const CLOSELY: Care = { coreCuts: 12, closeKt: 0.01, mostSteps: 8 };
 /** For one of a thousand members. */
-export const QUICKLY: Care = { coreCuts: 4, closeKt: 0.25, mostSteps: 3 };
+export const QUICKLY: Care = { coreCuts: 6, closeKt: 0.25, mostSteps: 3 };
 
 
 const NE = 0;
@@ -50,8 +51,9 @@ export class Passage {
   private px = 0;
   private py = 0;
   private pz = 0;
-  /** Root of the distance at the last look-up, in radii of maximum wind. */
+  /** Root of the distance at the last look-up, in radii of maximum wind of the quadrant that weighs most. */
   private lastRoot = 0;
+  private edgeKt = 0;
 
   constructor(table: StormTable, paths: Paths, care: Care) {
     this.table = table;
@@ -109,12 +111,11 @@ export class Passage {
           const cutRoot = cut < coreCuts ? this.lastRoot : nextRoot;
           if (root < 1 !== cutRoot < 1) {
             // The wind is greatest just as the place crosses the radius of maximum wind.
-            const f = (cut - 1 + (1 - root) / (cutRoot - root)) / coreCuts;
-            const cusp = this.windBetween(i, f);
+            const f = this.coreEdge(i, (cut - 1) / coreCuts, root, cut / coreCuts, cutRoot);
             times[n] = i + f;
-            winds[n++] = cusp;
-            if (cusp > peak) {
-              peak = cusp;
+            winds[n++] = this.edgeKt;
+            if (this.edgeKt > peak) {
+              peak = this.edgeKt;
               peakAt = i + f;
             }
           }
@@ -163,6 +164,30 @@ export class Passage {
     this.peakKt = peak;
     this.peakLead = this.lead(peakAt);
     return n;
+  }
+
+  /** Where between two cuts the place crosses the radius of maximum wind, and the strongest wind met in finding it (`edgeKt`). */
+  private coreEdge(node: number, f0: number, root0: number, f1: number, root1: number): number {
+    this.edgeKt = 0;
+    let best = f0;
+    for (let step = 0; step < EDGE_STEPS; step++) {
+      const f = f0 + ((1 - root0) / (root1 - root0)) * (f1 - f0);
+      const wind = this.windBetween(node, f);
+      const root = this.lastRoot;
+      if (wind > this.edgeKt) {
+        this.edgeKt = wind;
+        best = f;
+      }
+      if (root < 1 === root0 < 1) {
+        f0 = f;
+        root0 = root;
+      } else {
+        f1 = f;
+        root1 = root;
+      }
+      if (root1 === root0) break;
+    }
+    return best;
   }
 
   private crossOne(index: 0 | 1 | 2, kt: number): void {
@@ -265,7 +290,7 @@ export class Passage {
     const weight = 0.5 * (1 + k);
     const atA = root * perRootKm[first];
     const atB = root * perRootKm[second];
-    this.lastRoot = (atB + weight * (atA - atB)) / BINS_PER_ROOT;
+    this.lastRoot = (weight >= 0.5 ? atA : atB) / BINS_PER_ROOT;
     let windA = 0;
     let windB = 0;
     if (atA < BINS - 2) {

@@ -5,7 +5,7 @@ export const LEAST_CHANCE_FOR_TIMES = 0.05;
 export const QUANTILES = [0.1, 0.5, 0.9] as const;
 
 /** Width of a bin of the time histograms, hours. */
-export const TIME_BIN_HOURS = 0.25;
+export const TIME_BIN_HOURS = 0.5;
 
 /**
  * The time before which a share of a histogram's `total` counts lie, interpolated within its bin; `offset` is where the row

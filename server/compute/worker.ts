@@ -16,8 +16,8 @@ import { arrivalSwath, chanceSwath, peakSwath } from './swath';
 import { shareArrays, sharedBytes } from './shared';
 import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, InspectTask, Inspection, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
 
-const TRACK_STEP_HOURS = 0.5;
-const MEMBER_STEP_HOURS = 1;
+const TRACK_STEP_HOURS = 1;
+const MEMBER_STEP_HOURS = 2;
 /** A little under the lowest threshold, so that winds between two lattice corners are known on both sides of it. */
 const MEMBER_LIMIT_KT = 28;
 const LAND_CELL_KM = 1;
