@@ -3,6 +3,7 @@ import { useStore } from 'zustand';
 import type { StoreApi } from 'zustand/vanilla';
 import { prefsStore } from '../prefs/prefs';
 import { GraticuleLabels } from './GraticuleLabels';
+import { LitZones } from './LitZones';
 import styles from './Map.module.css';
 import type { MapState } from './mapState';
 import { PlaceLabels } from './PlaceLabels';
@@ -21,6 +22,7 @@ export function MapOverlay({ map }: { map: StoreApi<MapState> }) {
   if (size.width === 0) return null;
   return (
     <svg className={styles.overlay} width={size.width} height={size.height} aria-hidden="true">
+      <LitZones camera={camera} size={size} />
       <GraticuleLabels camera={camera} size={size} />
       {track && <TrackLine track={track} camera={camera} size={size} />}
       <PlaceLabels track={track} places={places} camera={camera} size={size} />

@@ -2,7 +2,7 @@ import { IconLayer, ScatterplotLayer } from '@deck.gl/layers';
 import type { Layer } from '@deck.gl/core';
 import type { Marks } from '../http/api';
 import type { GlyphAtlas } from './glyphAtlas';
-import { markClasses, markColumns, marksWhere } from './marks';
+import { markClasses, markColumns, marksWhere, thinned } from './marks';
 import type { MarkColumns } from './marks';
 import type { Palette, Rgba } from './palette';
 import { withAlpha } from './palette';
@@ -16,10 +16,10 @@ export interface DrawnMarks {
 const CROWD = 200;
 
 /** Columns and icons for the classes that are shown. */
-export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, palette: Palette): DrawnMarks {
+export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, zoomLevel: number, palette: Palette): DrawnMarks {
   const classes = new Map(markClasses(marks).map((one) => [one.name, one]));
   const shown = (name: string): boolean => !hidden.has(name);
-  const dots = markColumns(marks, marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph === 'dot'), palette);
+  const dots = markColumns(marks, thinned(marks, marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph === 'dot'), zoomLevel), palette);
   const chosen = marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph !== 'dot');
   const columns = markColumns(marks, chosen, palette);
   const glyphs = Array.from(columns.index, (index, i) => ({
@@ -47,7 +47,7 @@ export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom:
       opacity: 0.45 + 0.45 * near,
       stroked: false,
     }),
-    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.ink, 0.9) }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.halo, 0.85) }),
     new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-${key}`, getIcon: (mark) => mark.glyph, getColor: (mark) => (mark.colour[3] < 255 ? palette.halo : mark.colour) }),
   ];
 }

@@ -11,8 +11,8 @@ import { rgba, withAlpha } from './palette';
 
 /** How much of the ground each band hides: land and zones stay readable under all of them. */
 const COVER: Record<Palette['theme'], Record<ThresholdKey, number>> = {
-  night: { '34': 0.42, '50': 0.5, '64': 0.62 },
-  day: { '34': 0.4, '50': 0.5, '64': 0.66 },
+  night: { '34': 0.55, '50': 0.6, '64': 0.68 },
+  day: { '34': 0.5, '50': 0.58, '64': 0.72 },
 };
 
 interface Piece {
@@ -24,8 +24,8 @@ const band = (area: Area): ThresholdKey => String(area.thresholdKt) as Threshold
 
 function fill(area: Area, palette: Palette): Rgba {
   if (area.chance === null) return withAlpha(palette.band[band(area)].fill, COVER[palette.theme][band(area)]);
-  // Chances nest: each step adds its own cover.
-  return withAlpha(rgba(chanceColour(palette.theme, area.chance)), 0.34);
+  // Chances nest: each step covers the one below, so that its colour is the legend's.
+  return withAlpha(rgba(chanceColour(palette.theme, area.chance)), 0.82);
 }
 
 const edge = (area: Area, palette: Palette): Rgba => (area.chance === null ? palette.band[band(area)].edge : rgba(chanceColour(palette.theme, area.chance)));

@@ -22,15 +22,13 @@ function parts(zones: ZoneShape[]) {
   return found;
 }
 
-/** Zones tinted by the greatest wind that reaches them, thin outlines, the lit one strong. `winds` is kt by zone id. */
-export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>, lit: string | null, selected: string | null, palette: Palette, windKey: number): { fills: Layer[]; lines: Layer[] } {
+/** Zones tinted by the greatest wind that reaches them, with thin outlines. `winds` is kt by zone id; `windKey` changes with it. */
+export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>, palette: Palette, windKey: number): { fills: Layer[]; lines: Layer[] } {
   const { pieces, lines } = parts(zones);
   const tint = (id: string): Rgba => {
     const band = bandOf(winds.get(id) ?? 0);
-    if (id === lit) return withAlpha(palette.ink, 0.16);
     return band ? withAlpha(palette.band[band].fill, 0.22) : [0, 0, 0, 0];
   };
-  const strong = (id: string): boolean => id === lit || id === selected;
   return {
     fills: [
       new SolidPolygonLayer<{ id: string; polygon: Polygon }>({
@@ -39,7 +37,7 @@ export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>
         getPolygon: ({ polygon }) => polygon as [number, number][][],
         getFillColor: ({ id }) => tint(id),
         extruded: false,
-        updateTriggers: { getFillColor: [palette.theme, windKey, lit] },
+        updateTriggers: { getFillColor: [palette.theme, windKey] },
       }),
     ],
     lines: [
@@ -47,11 +45,10 @@ export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>
         id: 'zone-outlines',
         data: lines,
         getPath: ({ line }) => line as [number, number][],
-        getColor: ({ id }) => (strong(id) ? palette.ink : withAlpha(palette.ink, 0.34)),
-        getWidth: ({ id }) => (strong(id) ? 2.5 : 0.75),
+        getColor: withAlpha(palette.ink, 0.4),
+        getWidth: 0.75,
         widthUnits: 'pixels',
-        jointRounded: true,
-        updateTriggers: { getColor: [palette.theme, lit, selected], getWidth: [lit, selected] },
+        updateTriggers: { getColor: palette.theme },
       }),
     ],
   };

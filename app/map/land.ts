@@ -1,6 +1,9 @@
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import type { FeatureCollection, Position } from 'geojson';
+import { clipPolygons, withoutBox } from './clip';
+import { unproject } from './mercator';
+import type { Bounds, Camera, Size } from './mercator';
 import { outlinesOf, polygonsOf, runOnPolygon } from './shapes';
 import type { Polygon } from './shapes';
 
@@ -9,28 +12,59 @@ export interface Land {
   outlines: Position[][];
 }
 
-const cache = new Map<string, Promise<Land>>();
+const cache = new Map<string, Promise<Polygon[]>>();
 
 /** Land by file, fetched once a page. Natural Earth (public domain) as packed in world-atlas, or a coast of an exercise's own. */
-export function loadLand(path: string): Promise<Land> {
+function loadPolygons(path: string): Promise<Polygon[]> {
   let land = cache.get(path);
   if (!land) {
-    land = fetchLand(path);
+    land = fetchPolygons(path);
     land.catch(() => cache.delete(path));
     cache.set(path, land);
   }
   return land;
 }
 
-async function fetchLand(path: string): Promise<Land> {
+async function fetchPolygons(path: string): Promise<Polygon[]> {
   const response = await fetch(path);
   if (!response.ok) throw new Error(`${path}: ${response.status}`);
   const body = (await response.json()) as Topology<{ land: GeometryCollection }> | FeatureCollection;
   const collection = body.type === 'Topology' ? (feature(body, body.objects.land) as FeatureCollection) : body;
-  const polygons = collection.features.flatMap((one) => polygonsOf(one.geometry)).map(runOnPolygon);
-  return { polygons, outlines: outlinesOf(polygons) };
+  return collection.features.flatMap((one) => polygonsOf(one.geometry)).map(runOnPolygon);
 }
 
-/** Above this zoom the coast is drawn from the 1:10,000,000 data. */
-export const FINE_ZOOM = 5.5;
-export const landPath = (zoom: number): string => (zoom >= FINE_ZOOM ? '/land/land-10m.json' : '/land/land-50m.json');
+/** Where the land of a view comes from: the whole world coarsely, or a box around the view from the 1:10,000,000 data. */
+export interface LandWish {
+  path: string;
+  box: Bounds | null;
+}
+
+const FINE_ZOOM = 5.5;
+const COARSE = '/land/land-50m.json';
+const FINE = '/land/land-10m.json';
+
+/** The box holds the view with as much again on every side, in steps, so that panning seldom asks for another. */
+export function landWish(camera: Camera, size: Size): LandWish {
+  if (camera.zoom < FINE_ZOOM || size.width === 0) return { path: COARSE, box: null };
+  const step = 5;
+  const half = ((size.width / 2) * 360) / (512 * 2 ** camera.zoom);
+  const [, north] = unproject(camera, size, 0, 0);
+  const [, south] = unproject(camera, size, 0, size.height);
+  const tall = north - south;
+  return {
+    path: FINE,
+    box: {
+      west: Math.floor((camera.lon - 2 * half) / step) * step - step,
+      east: Math.ceil((camera.lon + 2 * half) / step) * step + step,
+      south: Math.max(-90, Math.floor((south - tall / 2) / step) * step - step),
+      north: Math.min(90, Math.ceil((north + tall / 2) / step) * step + step),
+    },
+  };
+}
+
+export async function loadLand({ path, box }: LandWish): Promise<Land> {
+  const polygons = await loadPolygons(path);
+  if (!box) return { polygons, outlines: outlinesOf(polygons) };
+  const inside = clipPolygons(polygons, box);
+  return { polygons: inside, outlines: withoutBox(outlinesOf(inside), box) };
+}

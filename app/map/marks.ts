@@ -1,5 +1,6 @@
 import type { Marks } from '../http/api';
 import { bandOf } from '../theme/bands';
+import { worldX, worldY } from './mercator';
 import type { Palette, Rgba } from './palette';
 import { withAlpha } from './palette';
 
@@ -68,4 +69,24 @@ export function marksWhere(marks: Marks, wanted: (className: string) => boolean)
     if (yes[index]) chosen.push(i);
   });
   return chosen;
+}
+
+const CELL_PX = 2;
+/** From here on every dot has room of its own. */
+const ALL_FROM_ZOOM = 11;
+
+/**
+ * Of the marks that fall on one spot of the screen at a zoom level (a cell of two pixels), the one with the strongest wind: what
+ * would be drawn over and over is drawn once. Counts never use this.
+ */
+export function thinned(marks: Marks, chosen: readonly number[], zoomLevel: number): number[] {
+  if (zoomLevel >= ALL_FROM_ZOOM) return [...chosen];
+  const strongest = new Map<number, number>();
+  const across = (512 * 2 ** (zoomLevel + 1)) / CELL_PX;
+  for (const mark of chosen) {
+    const cell = Math.floor(worldY(marks.lat[mark], zoomLevel + 1) / CELL_PX) * across + Math.floor(worldX(marks.lon[mark], zoomLevel + 1) / CELL_PX);
+    const held = strongest.get(cell);
+    if (held === undefined || marks.maxWindKt[mark] > marks.maxWindKt[held]) strongest.set(cell, mark);
+  }
+  return [...strongest.values()];
 }

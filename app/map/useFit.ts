@@ -5,11 +5,11 @@ import type { MapState } from './mapState';
 import { boundsOf, fitted, nearestTurn } from './mercator';
 import type { Bounds } from './mercator';
 
-/** The storm's centre joins the view while it is within this many degrees of what is worked on. */
-const NEAR_DEG = 5;
+/** The view leans towards the storm by at most this share of what is worked on, so that the zones stay large. */
+const LEAN = 0.45;
 const PADDING = { top: 26, right: 40, bottom: 40, left: 40 };
 
-/** Shows the zones (else the assets, else the track), with the storm when it is near; a preview shows all its points. */
+/** Shows the zones (else the assets, else the track), leaning towards the storm; a preview shows all its points. */
 export function useFit(map: StoreApi<MapState>): () => void {
   const zones = useBulk((state) => state.zones);
   const marks = useBulk((state) => state.marks);
@@ -42,7 +42,11 @@ export function useFit(map: StoreApi<MapState>): () => void {
 function withStorm(bounds: Bounds | null, centre: readonly [number, number] | undefined): Bounds | null {
   if (!bounds || !centre) return bounds;
   const lon = nearestTurn(centre[0], (bounds.west + bounds.east) / 2);
-  const near = lon > bounds.west - NEAR_DEG && lon < bounds.east + NEAR_DEG && centre[1] > bounds.south - NEAR_DEG && centre[1] < bounds.north + NEAR_DEG;
-  if (!near) return bounds;
-  return { west: Math.min(bounds.west, lon), east: Math.max(bounds.east, lon), south: Math.min(bounds.south, centre[1]), north: Math.max(bounds.north, centre[1]) };
+  const [wide, tall] = [(bounds.east - bounds.west) * LEAN, (bounds.north - bounds.south) * LEAN];
+  return {
+    west: Math.max(bounds.west - wide, Math.min(bounds.west, lon)),
+    east: Math.min(bounds.east + wide, Math.max(bounds.east, lon)),
+    south: Math.max(bounds.south - tall, Math.min(bounds.south, centre[1])),
+    north: Math.min(bounds.north + tall, Math.max(bounds.north, centre[1])),
+  };
 }

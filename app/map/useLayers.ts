@@ -10,23 +10,24 @@ import { drawSwath } from './drawSwath';
 import { drawZones } from './drawZones';
 import { makeGlyphAtlas } from './glyphAtlas';
 import { graticuleStep } from './graticule';
-import { landPath, loadLand } from './land';
-import type { Land } from './land';
+import { landWish, loadLand } from './land';
+import type { Land, LandWish } from './land';
 import type { MapState } from './mapState';
 import { palette } from './palette';
 
-const DEMO_COAST = '/demo/coast.geojson';
+const DEMO_COAST = JSON.stringify({ path: '/demo/coast.geojson', box: null } satisfies LandWish);
 
-function useLand(path: string | null): Land | null {
+/** The wish as text, so that a view that wants the same land does not ask again. */
+function useLand(wish: string | null): Land | null {
   const [land, setLand] = useState<Land | null>(null);
   useEffect(() => {
-    if (!path) return;
+    if (!wish) return;
     let wanted = true;
-    loadLand(path).then((found) => wanted && setLand(found), () => undefined);
+    loadLand(JSON.parse(wish) as LandWish).then((found) => wanted && setLand(found), () => undefined);
     return () => {
       wanted = false;
     };
-  }, [path]);
+  }, [wish]);
   return land;
 }
 
@@ -35,27 +36,26 @@ export function useLayers(map: StoreApi<MapState>): Layer[] {
   const theme = useStore(themeStore, (state) => state.theme);
   const paint = useMemo(() => palette(theme, (name) => getComputedStyle(document.documentElement).getPropertyValue(name)), [theme]);
   const step = useStore(map, (state) => graticuleStep(state.camera));
-  const path = useStore(map, (state) => landPath(state.camera.zoom));
+  const wish = useStore(map, (state) => JSON.stringify(landWish(state.camera, state.size)));
   const zoom = useStore(map, (state) => Math.round(state.camera.zoom * 4) / 4);
-  const world = useLand(path);
+  const world = useLand(wish);
   const demo = useLive((state) => state.event?.demo ?? false);
   const coast = useLand(demo ? DEMO_COAST : null);
   const swath = useBulk((state) => state.swath);
   const zones = useBulk((state) => state.zones);
   const marks = useBulk((state) => state.marks);
   const impact = useLive((state) => state.impact);
-  const lit = useView((state) => state.hoverZone);
-  const selected = useView((state) => state.selectedZone);
   const hidden = useView((state) => state.hiddenClasses);
   const preview = useView((state) => state.preview !== null);
   const atlas = useMemo(() => makeGlyphAtlas(), []);
 
   const lands = useMemo(() => [...(world ? [{ id: 'world', land: world }] : []), ...(coast ? [{ id: 'demo', land: coast }] : [])], [world, coast]);
   const winds = useMemo(() => new Map(impact?.zones.map((zone) => [zone.id, zone.maxWindKt])), [impact]);
-  const drawn = useMemo(() => marks && prepareMarks(marks, hidden, paint), [marks, hidden, paint]);
+  const level = Math.floor(zoom);
+  const drawn = useMemo(() => marks && prepareMarks(marks, hidden, level, paint), [marks, hidden, level, paint]);
 
   return useMemo(() => {
-    const { fills, lines } = drawZones(zones, preview ? new Map() : winds, lit, selected, paint, preview ? 0 : (impact?.revision ?? 0));
+    const { fills, lines } = drawZones(zones, preview ? new Map() : winds, paint, preview ? 0 : (impact?.revision ?? 0));
     return [
       ...drawGround(lands, step, paint),
       ...fills,
@@ -63,7 +63,7 @@ export function useLayers(map: StoreApi<MapState>): Layer[] {
       ...(swath && !preview ? drawSwath(swath, paint) : []),
       ...drawCoast(lands, paint),
       ...lines,
-      ...(drawn && marks && !preview ? drawMarks(drawn, atlas, zoom, paint, `${paint.theme}-${marks.revision}-${[...hidden].join()}`) : []),
+      ...(drawn && marks && !preview ? drawMarks(drawn, atlas, zoom, paint, `${paint.theme}-${marks.revision}-${[...hidden].join()}-${level}`) : []),
     ];
-  }, [lands, step, paint, zones, winds, impact?.revision, lit, selected, swath, preview, drawn, marks, atlas, zoom, hidden]);
+  }, [lands, step, paint, zones, winds, impact?.revision, swath, preview, drawn, marks, atlas, zoom, level, hidden]);
 }

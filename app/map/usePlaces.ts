@@ -17,8 +17,8 @@ export function usePlaces(): Place[] {
     if (!demo) return;
     const stop = new AbortController();
     fetch('/demo/world.json', { signal: stop.signal })
-      .then((response) => (response.ok ? response.json() : { towns: [] }))
-      .then((world: { towns?: Place[] }) => setPlaces(world.towns ?? []), () => undefined);
+      .then((response) => (response.ok ? response.json() : { places: [] }))
+      .then((world: { places?: Place[] }) => setPlaces(world.places ?? []), () => undefined);
     return () => stop.abort();
   }, [demo]);
   return places;

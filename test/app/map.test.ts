@@ -1,15 +1,21 @@
 import { WebMercatorViewport } from '@deck.gl/core';
 import { readFileSync } from 'node:fs';
-import { booleanPointInPolygon } from '@turf/turf';
+import { area, bboxClip, booleanPointInPolygon, multiPolygon } from '@turf/turf';
 import type { FeatureCollection } from 'geojson';
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import { describe, expect, test } from 'vitest';
 import { boundsOf, fitted, kmPerPixel, panned, project, unproject } from '../../app/map/mercator';
+import { clipPolygons, withoutBox } from '../../app/map/clip';
 import { graticule } from '../../app/map/graticule';
 import { placeLabels } from '../../app/map/labels';
 import { scaleLength } from '../../app/map/scaleBar';
 import { outlinesOf, polygonHolds, polygonsOf, runOnPolygon } from '../../app/map/shapes';
+
+function naturalEarth() {
+  const topology = JSON.parse(readFileSync(new URL('../../public/land/land-50m.json', import.meta.url), 'utf8')) as Topology<{ land: GeometryCollection }>;
+  return (feature(topology, topology.objects.land) as FeatureCollection).features.flatMap((one) => polygonsOf(one.geometry));
+}
 
 const size = { width: 900, height: 600 };
 const none = { top: 0, right: 0, bottom: 0, left: 0 };
@@ -101,6 +107,28 @@ describe('labels', () => {
   });
 });
 
+describe('land around a view', () => {
+  const bounds = { west: -90, east: -60, south: 20, north: 40 };
+  const land = naturalEarth().map(runOnPolygon);
+
+  test('is the land that turf clips to the same box', () => {
+    const ours = area(multiPolygon(clipPolygons(land, bounds)));
+    const turfs = land.reduce((sum, polygon) => sum + area(bboxClip({ type: 'Polygon', coordinates: polygon }, [-90, 20, -60, 40])), 0);
+    expect(Math.abs(ours / turfs - 1)).toBeLessThan(1e-9);
+  });
+
+  test('reaches over the 180th meridian', () => {
+    const fiji = clipPolygons(land, { west: 170, east: 190, south: -25, north: -10 });
+    expect(fiji.flat(2).some(([lon]) => lon < 180)).toBe(true);
+    expect(fiji.flat(2).some(([lon]) => lon > 180)).toBe(true);
+  });
+
+  test('has no shore where it was cut', () => {
+    const lines = withoutBox(outlinesOf(clipPolygons(land, bounds)), bounds);
+    for (const line of lines) for (let i = 1; i < line.length; i++) expect(line[i][0] === -90 && line[i - 1][0] === -90).toBe(false);
+  });
+});
+
 describe('polygons', () => {
   const holed = [
     [[0, 0], [10, 0], [10, 10], [0, 10], [0, 0]],
@@ -114,9 +142,7 @@ describe('polygons', () => {
   });
 
   test('no coast of Natural Earth jumps across the map, but for the one round the south pole', () => {
-    const topology = JSON.parse(readFileSync(new URL('../../public/land/land-50m.json', import.meta.url), 'utf8')) as Topology<{ land: GeometryCollection }>;
-    const collection = feature(topology, topology.objects.land) as FeatureCollection;
-    const polygons = collection.features.flatMap((one) => polygonsOf(one.geometry));
+    const polygons = naturalEarth();
     const jumps = (all: typeof polygons) => all.filter((polygon) => polygon[0].some(([lon], i) => i > 0 && Math.abs(lon - polygon[0][i - 1][0]) > 180));
     expect(jumps(polygons).length).toBeGreaterThan(1);
     const left = jumps(polygons.map(runOnPolygon));
