@@ -72,13 +72,16 @@ function gridOf(west: number, south: number, east: number, north: number, cellKm
   return { west, south, stepLon: (east - west) / (columns - 1), stepLat: (north - south) / (rows - 1), columns, rows };
 }
 
-/** Half the way between the nearest cells of either kind is the coast. */
+/**
+ * The coast lies between the nearest cells of either kind: half a cell before the far one on a straight coast along the grid, next to
+ * it on any other, where some cell always lies close behind. A quarter serves both to a quarter of a cell.
+ */
 function signedDistance(land: Uint8Array, columns: number, rows: number, stepX: Float64Array, stepY: number): Float32Array {
   const toSea = distanceTransform(land, 0, columns, rows, stepX, stepY);
   const toLand = distanceTransform(land, 1, columns, rows, stepX, stepY);
   for (let i = 0; i < land.length; i++) {
-    const half = 0.5 * Math.min(stepY, stepX[(i / columns) | 0]);
-    toSea[i] = land[i] ? Math.min(FARTHEST_KM, toSea[i] - half) : -Math.min(FARTHEST_KM, toLand[i] - half);
+    const quarter = 0.25 * Math.min(stepY, stepX[(i / columns) | 0]);
+    toSea[i] = land[i] ? Math.min(FARTHEST_KM, toSea[i] - quarter) : -Math.min(FARTHEST_KM, toLand[i] - quarter);
   }
   return toSea;
 }

@@ -1,6 +1,7 @@
 import type { MultiPolygon, Polygon } from 'geojson';
 import { describe, expect, test } from 'vitest';
 import { destination, makeLandMask, quadrantRing } from '../../lib/geo';
+import { rasterise } from '../../lib/geo/rasterise';
 
 const rectangle = (west: number, south: number, east: number, north: number): number[][] => [
   [west, south],
@@ -93,6 +94,28 @@ test('every place a kilometre or more off a round coast is on the right side of 
       expect(Math.abs(mask.coastDistanceKm(place.lat, place.lon) - (radiusKm - km))).toBeLessThan(1);
     }
   }
+});
+
+test('distances to a round coast are right in the mean to a quarter of a cell', () => {
+  const mask = makeLandMask({ type: 'Polygon', coordinates: [quadrantRing(25, -58, [100, 100, 100, 100])] }, bounds);
+  for (const km of [40, 70, 140, 170]) {
+    let error = 0;
+    for (let azimuth = 0; azimuth < 360; azimuth++) {
+      const place = destination(25, -58, azimuth, km);
+      error += (mask.coastDistanceKm(place.lat, place.lon) - (100 - km)) / 360;
+    }
+    expect(Math.abs(error)).toBeLessThan(0.25);
+  }
+});
+
+test('a corner that lies on a row of cells is crossed once', () => {
+  // A diamond with its corners on the middle row, which is at 25 N: bounds three degrees either side and an even number of steps.
+  const diamond: Polygon = { type: 'Polygon', coordinates: [[[-59, 25], [-58, 24], [-57, 25], [-58, 26], [-59, 25]]] };
+  const marked = rasterise(diamond, { west: -61, south: 22, stepLon: 0.5, stepLat: 0.5, columns: 13, rows: 13 });
+  const row = (lat: number): number[] => [...marked.slice(((lat - 22) / 0.5) * 13, ((lat - 22) / 0.5 + 1) * 13)];
+  expect(row(25)).toEqual([0, 0, 0, 0, 1, 1, 1, 1, 0, 0, 0, 0, 0]);
+  expect(row(24.5)).toEqual([0, 0, 0, 0, 0, 1, 1, 0, 0, 0, 0, 0, 0]);
+  expect(row(22.5).includes(1)).toBe(false);
 });
 
 test('a box too large for its cells gets coarser ones, not more memory', () => {
