@@ -1,16 +1,9 @@
 import type { MultiPolygon, Polygon } from 'geojson';
+import type { Bounds } from './bounds';
 import { distanceTransform } from './distanceTransform';
 import { rasterise } from './rasterise';
 import type { RasterGrid } from './rasterise';
 import { EARTH_RADIUS_KM } from './sphere';
-
-/** A box in degrees. `east` may be below `west`, or past 180, where the box crosses the antimeridian. */
-export interface Bounds {
-  west: number;
-  south: number;
-  east: number;
-  north: number;
-}
 
 export interface LandMask {
   isLand(lat: number, lon: number): boolean;
