@@ -1,6 +1,6 @@
 'use client';
 import { useVirtualizer } from '@tanstack/react-virtual';
-import { useMemo, useRef } from 'react';
+import { useMemo, useState } from 'react';
 import type { Impact } from '../../lib/impact';
 import { useFormats } from '../live/EventContext';
 import { words } from '../words';
@@ -17,7 +17,7 @@ const ROW_PX = 25;
 /** Time from left to right, a row a zone in the order of the table: what comes next, at one look. */
 export function ArrivalStrip({ zones, impact, nowMs }: { zones: readonly ZoneView[]; impact: Impact | null; nowMs: number | null }) {
   const formats = useFormats();
-  const scroller = useRef<HTMLDivElement>(null);
+  const [scroller, setScroller] = useState<HTMLDivElement | null>(null);
   useRowScroll(scroller, 'strip', ROW_PX);
   const byId = useMemo(() => new Map(impact?.zones.map((row) => [row.id, stripRow(row, impact.stage)])), [impact]);
   const rows = zones.flatMap((zone) => byId.get(zone.id) ?? []);
@@ -28,14 +28,14 @@ export function ArrivalStrip({ zones, impact, nowMs }: { zones: readonly ZoneVie
   }, [byId, minuteMs]);
   const lines = useMemo(() => sixHourLines(span, formats.timeZone), [span, formats.timeZone]);
   // eslint-disable-next-line react-hooks/incompatible-library -- no compiler runs here
-  const virtual = useVirtualizer({ count: rows.length, getScrollElement: () => scroller.current, estimateSize: () => ROW_PX, overscan: 8 });
+  const virtual = useVirtualizer({ count: rows.length, getScrollElement: () => scroller, estimateSize: () => ROW_PX, overscan: 8 });
   if (nowMs === null || !impact || rows.length === 0) return <section className={styles.strip} aria-label={words.strip.label}><h2 className={styles.title}>{words.strip.title}</h2><p className={styles.empty}>{words.strip.empty}</p></section>;
   return (
     <section className={styles.strip} aria-label={words.strip.label}>
       <div className={`${styles.sideways} scroll`} tabIndex={0} role="region" aria-label={words.strip.label}>
         <div className={styles.inner}>
           <StripHead span={span} lines={lines} nowMs={nowMs} formats={formats} />
-          <div className={`${styles.scroller} scroll`} ref={scroller}>
+          <div className={`${styles.scroller} scroll`} tabIndex={0} role="group" aria-label={words.strip.title} ref={setScroller}>
             <div className={styles.body} style={{ height: virtual.getTotalSize() }}>
               <div className={styles.grid} aria-hidden="true">
                 {lines.map((line) => (

@@ -1,7 +1,7 @@
 'use client';
 import { getCoreRowModel, useReactTable } from '@tanstack/react-table';
 import { useVirtualizer } from '@tanstack/react-virtual';
-import { useMemo, useRef } from 'react';
+import { useMemo, useState } from 'react';
 import type { Impact } from '../../lib/impact';
 import { useFormats, useHold, useView } from '../live/EventContext';
 import { words } from '../words';
@@ -18,14 +18,14 @@ export function ZoneTable({ zones, impact }: { zones: ZoneView[]; impact: Impact
   const { view } = useHold();
   const formats = useFormats();
   const sort = useView((state) => state.sort);
-  const scroller = useRef<HTMLDivElement>(null);
+  const [scroller, setScroller] = useState<HTMLDivElement | null>(null);
   const rowPx = useRowHeight();
   const stage = impact?.stage ?? 'track';
   const columns = useMemo(() => zoneColumns(formats, stage), [formats, stage]);
   // eslint-disable-next-line react-hooks/incompatible-library -- no compiler runs here; both libraries are safe without one
   const table = useReactTable({ data: zones, columns, getCoreRowModel: getCoreRowModel(), getRowId: (zone) => zone.id, manualSorting: true });
   const rows = table.getRowModel().rows;
-  const virtual = useVirtualizer({ count: rows.length, getScrollElement: () => scroller.current, estimateSize: () => rowPx, overscan: 12 });
+  const virtual = useVirtualizer({ count: rows.length, getScrollElement: () => scroller, estimateSize: () => rowPx, overscan: 12 });
   useRowScroll(scroller, 'table', rowPx);
   const seen = virtual.getVirtualItems();
   const above = seen[0]?.start ?? 0;
@@ -36,7 +36,7 @@ export function ZoneTable({ zones, impact }: { zones: ZoneView[]; impact: Impact
     <section className={styles.zones} aria-label={words.zones.title} id="zones">
       {impact !== null && impact.zones.length === 0 && <p className={styles.none}>{words.zones.none}</p>}
       {noneReached && <p className={styles.none}>{words.zones.noneReached}</p>}
-      <div className={`${styles.scroller} scroll`} ref={scroller} tabIndex={0} role="region" aria-label={words.zones.caption}>
+      <div className={`${styles.scroller} scroll`} ref={setScroller} tabIndex={0} role="region" aria-label={words.zones.caption}>
         {zones.length > 0 && (
           <table className={styles.table} aria-rowcount={rows.length + 1} style={{ '--row': `${rowPx}px` } as React.CSSProperties}>
             <caption className="unseen">{words.zones.caption}</caption>

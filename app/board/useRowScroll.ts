@@ -1,15 +1,13 @@
 import { useEffect } from 'react';
-import type { RefObject } from 'react';
 import { useHold } from '../live/EventContext';
 
 /**
  * Scrolls a list in step with the other: both share the first row in sight. Only the list that the reader touched last leads,
  * so that the shorter one cannot pull the longer one back.
  */
-export function useRowScroll(scroller: RefObject<HTMLElement | null>, name: 'table' | 'strip', rowPx: number): void {
+export function useRowScroll(element: HTMLElement | null, name: 'table' | 'strip', rowPx: number): void {
   const { view } = useHold();
   useEffect(() => {
-    const element = scroller.current;
     if (!element) return;
     const lead = (): void => view.setState({ leader: name });
     const follow = (firstRow: number): void => {
@@ -30,5 +28,5 @@ export function useRowScroll(scroller: RefObject<HTMLElement | null>, name: 'tab
       element.removeEventListener('scroll', scrolled);
       stop();
     };
-  }, [scroller, name, rowPx, view]);
+  }, [element, name, rowPx, view]);
 }
