@@ -26,7 +26,7 @@ export function ForecastsPage() {
     <div className={`${page.page} scroll`}>
       <h1>{words.forecasts.title}</h1>
       {!may && <p className="dim">{words.forecasts.onlyOperators}</p>}
-      {byHand ? <AdvisoryByHand reading={reading} onBack={() => setByHand(false)} /> : <SourceInput onSource={reading.read} onByHand={() => setByHand(true)} busy={reading.state.kind === 'reading'} />}
+      {!may ? null : byHand ? <AdvisoryByHand reading={reading} onBack={() => setByHand(false)} /> : <SourceInput onSource={reading.read} onByHand={() => setByHand(true)} busy={reading.state.kind === 'reading'} />}
       <Reading reading={reading} byHand={byHand} mayIssue={may} />
       <History eventId={eventId} />
     </div>

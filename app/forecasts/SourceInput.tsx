@@ -4,18 +4,18 @@ import { DropZone } from 'react-aria-components/DropZone';
 import { FileTrigger } from 'react-aria-components/FileTrigger';
 import { Text } from 'react-aria-components/Text';
 import { decodeText } from '../../lib/advisory';
+import { MOST_ADVISORY_BYTES } from '../../lib/wire';
 import { Button } from '../ui/Button';
 import { Field } from '../ui/Field';
 import ui from '../ui/ui.module.css';
 import { words } from '../words';
-import { MOST_BYTES } from './source';
 import type { Source } from './source';
 
 const text = words.forecasts;
 
 /** The file as a source; its text is kept beside it to quote lines from. */
 async function fromFile(file: File): Promise<Source> {
-  const decoded = file.size > MOST_BYTES ? null : decodeText(new Uint8Array(await file.arrayBuffer()));
+  const decoded = file.size > MOST_ADVISORY_BYTES ? null : decodeText(new Uint8Array(await file.arrayBuffer()));
   return { name: file.name, body: file, contentType: 'text/plain', text: decoded?.ok ? decoded.text : null };
 }
 

@@ -9,9 +9,6 @@ export interface Source {
   text: string | null;
 }
 
-/** An advisory is a few kilobytes; a deck of a whole season some megabytes. The server refuses more as well. */
-export const MOST_BYTES = 8 * 1024 * 1024;
-
 export const megabytes = (bytes: number): string => (bytes < 1024 * 1024 ? `${Math.max(1, Math.round(bytes / 1024))}\u00a0kB` : `${(bytes / 1024 / 1024).toFixed(1)}\u00a0MB`);
 
 export interface QuotedError {

@@ -1,10 +1,11 @@
 import { useCallback, useRef, useState } from 'react';
 import type { InputError } from '../../lib/advisory';
+import { MOST_ADVISORY_BYTES } from '../../lib/wire';
 import { RequestFailed } from '../http/problem';
 import { words } from '../words';
 import { issueForecast, readForecast } from './calls';
 import type { DeckChoice, DryRun } from './calls';
-import { megabytes, MOST_BYTES } from './source';
+import { megabytes } from './source';
 import type { Source } from './source';
 
 export type ReadingState =
@@ -36,7 +37,7 @@ export function useReading(eventId: string): ReadingControl {
       const bytes = typeof source.body === 'string' ? new Blob([source.body]).size : source.body.size;
       const refuse = (message: string): void => setState({ kind: 'wrong', source, choice, message, errors: [] });
       if (bytes === 0) return refuse(words.forecasts.empty);
-      if (bytes > MOST_BYTES) return refuse(words.forecasts.tooBig(megabytes(bytes), megabytes(MOST_BYTES)));
+      if (bytes > MOST_ADVISORY_BYTES) return refuse(words.forecasts.tooBig(megabytes(bytes), megabytes(MOST_ADVISORY_BYTES)));
       setState({ kind: 'reading', source, choice });
       readForecast(eventId, source, choice).then(
         (result) => {

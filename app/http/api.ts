@@ -33,7 +33,13 @@ export const fetchSwath = (eventId: string, revision: number, product: Product, 
 export const fetchMarks = (eventId: string, revision: number, signal?: AbortSignal): Promise<Marks> => getJson(`${event(eventId)}/impact/marks${query({ revision })}`, signal);
 export const fetchAssets = async (eventId: string, parameters: Record<string, string | number>, signal?: AbortSignal): Promise<AssetRow[]> =>
   (await getJson<Listed<AssetRow>>(`${event(eventId)}/impact/assets${query(parameters)}`, signal)).items;
-export const fetchLayers = async (eventId: string, signal?: AbortSignal): Promise<Layer[]> => (await getJson<Listed<Layer>>(`${event(eventId)}/layers${query({ limit: 200 })}`, signal)).items;
+/** The newest version of each layer; the list holds all of them, newest first. */
+export const fetchLayers = async (eventId: string, signal?: AbortSignal): Promise<Layer[]> => {
+  const { items } = await getJson<Listed<Layer>>(`${event(eventId)}/layers${query({ limit: 1000 })}`, signal);
+  const newest = new Map<string, Layer>();
+  for (const layer of items) if (!((newest.get(`${layer.kind} ${layer.name}`)?.version ?? 0) > layer.version)) newest.set(`${layer.kind} ${layer.name}`, layer);
+  return [...newest.values()];
+};
 export const fetchLayerSource = (eventId: string, layerId: string, signal?: AbortSignal): Promise<FeatureCollection> =>
   getJson(`${event(eventId)}/layers/${encodeURIComponent(layerId)}/source`, signal);
 export const fetchLog = async (eventId: string, signal?: AbortSignal): Promise<LogEntry[]> => (await getJson<Listed<LogEntry>>(`${event(eventId)}/log${query({ limit: 500 })}`, signal)).items;

@@ -7,6 +7,7 @@ import type { InputError } from '../../lib/advisory';
 import { LAYER_KINDS } from '../../lib/exposure';
 import type { LayerKind } from '../../lib/exposure';
 import { formatCount } from '../../lib/units';
+import { MOST_LAYER_BYTES } from '../../lib/wire';
 import { megabytes } from '../forecasts/source';
 import { RequestFailed } from '../http/problem';
 import { Button } from '../ui/Button';
@@ -16,7 +17,7 @@ import { Notice } from '../ui/Notice';
 import ui from '../ui/ui.module.css';
 import { words } from '../words';
 import { RowErrors } from './RowErrors';
-import { MOST_LAYER_BYTES, sendLayer } from './sendLayer';
+import { sendLayer } from './sendLayer';
 import type { LayerStored } from './sendLayer';
 
 const text = words.layers;

@@ -46,7 +46,7 @@ export function LayersPage() {
                 <td className="dim">{layer.classes.map((one) => `${one.class} ${formatCount(one.count)}`).join(', ')}</td>
                 <td className="number">{layer.version}</td>
                 <td>
-                  {formats.dayTime(layer.receivedAt)} <span className="dim">{layer.receivedBy}</span>
+                  {formats.date(layer.receivedAt)} {formats.clock(layer.receivedAt)} <span className="dim">{layer.receivedBy}</span>
                 </td>
               </tr>
             ))}

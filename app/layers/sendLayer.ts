@@ -5,10 +5,7 @@ import { query, request } from '../http/request';
 
 export type LayerStored = z.infer<typeof layerStoredSchema>;
 
-/** A layer of a whole country fits; the server refuses more as well. */
-export const MOST_LAYER_BYTES = 100 * 1024 * 1024;
-
-const TYPES: Record<string, string> = { csv: 'text/csv', geojson: 'application/geo+json', json: 'application/geo+json', tif: 'image/tiff', tiff: 'image/tiff' };
+const TYPES: Record<string, string> = { csv: 'text/csv', geojson: 'application/geo+json', json: 'application/geo+json' };
 
 /** Brings a layer in: all of it, or nothing with the reasons. */
 export async function sendLayer(eventId: string, kind: LayerKind, name: string, file: File): Promise<LayerStored> {

@@ -159,7 +159,7 @@ export const en = {
     issuing: 'Issuing',
     issued: (number: string) => `Advisory ${number} is issued and being computed.`,
     discard: 'Discard',
-    onlyOperators: 'Only operators issue advisories; you can read and check files.',
+    onlyOperators: 'Only operators read in and issue advisories.',
     technique: 'Technique',
     cycle: 'Cycle',
     firstFound: 'as detected',
