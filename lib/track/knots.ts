@@ -19,7 +19,7 @@ export interface Inferred {
 }
 
 /** A storm's wind by quadrant: the peak, how far from the centre it stands, and the radii. */
-export interface KnotStructure {
+interface KnotStructure {
   peaksKt: QuadrantKt;
   peakRadiiKm: QuadrantKm;
   radiiKm: ByThreshold<QuadrantKm>;

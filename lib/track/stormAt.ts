@@ -19,7 +19,7 @@ export interface Ring {
 }
 
 /** Peaks by quadrant, how far from the centre they stand, and the rings outside them, strongest first. */
-export interface StormStructure {
+interface StormStructure {
   peaksKt: QuadrantKt;
   peakRadiiKm: QuadrantKm;
   rings: readonly Ring[];

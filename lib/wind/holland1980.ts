@@ -1,5 +1,5 @@
 /** Parameters of Holland's profile, SI. */
-export interface Holland {
+interface Holland {
   /** Pressure outside the storm less central pressure, Pa. */
   pressureDropPa: number;
   radiusMaxM: number;
@@ -11,7 +11,7 @@ export interface Holland {
   density: number;
 }
 
-export const AIR_DENSITY = 1.15;
+const AIR_DENSITY = 1.15;
 
 /**
  * Gradient wind (m/s) at a radius (m): `sqrt((B dp / rho) (Rm/r)^B exp(-(Rm/r)^B) + (r f / 2)^2) - r |f| / 2`. Holland (1980), Mon.

@@ -2,6 +2,7 @@ import { decayExponent, QUADRANT_AZIMUTHS_DEG } from '../track';
 import type { Ring, StormState } from '../track';
 import { ktToMs } from '../units';
 import { schwerdtAsymmetryKt } from './asymmetry';
+import { modifiedRankine } from './modifiedRankine';
 import { willoughbyInnerExponent, willoughbyShape, willoughbyShareOfMax } from './willoughby2006';
 import type { WilloughbyShape } from './willoughby2006';
 
@@ -72,12 +73,10 @@ function throughRings(peakRadiusKm: number, peakKt: number, rings: readonly Ring
 /** Wind (kt, 1-minute at 10 m over water) at a radius along the governing azimuth of quadrant 0 NE, 1 SE, 2 SW, 3 NW. */
 export function profileKt(profiles: QuadrantProfiles, quadrant: number, radiusKm: number): number {
   const { innerExponent, parametric } = profiles;
-  const profile = profiles.quadrants[quadrant];
-  const peakRadiusKm = profile.radiusKm[0];
+  const { radiusKm: anchorKm, windKt, exponent } = profiles.quadrants[quadrant];
   if (radiusKm <= 0) return 0;
-  if (radiusKm <= peakRadiusKm) return profile.windKt[0] * (radiusKm / peakRadiusKm) ** innerExponent;
-  if (parametric) return profile.windKt[0] * willoughbyShareOfMax(radiusKm, peakRadiusKm, parametric);
-  let i = profile.radiusKm.length - 1;
-  while (i > 0 && radiusKm < profile.radiusKm[i]) i--;
-  return profile.windKt[i] * (profile.radiusKm[i] / radiusKm) ** profile.exponent[i];
+  if (parametric) return windKt[0] * willoughbyShareOfMax(radiusKm, anchorKm[0], parametric);
+  let i = anchorKm.length - 1;
+  while (i > 0 && radiusKm < anchorKm[i]) i--;
+  return modifiedRankine(radiusKm, windKt[i], anchorKm[i], exponent[i], innerExponent);
 }
