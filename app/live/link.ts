@@ -13,8 +13,12 @@ export interface LinkStatus {
   sinceMs: number;
 }
 
-/** What the screen says of its line: a short break is "reconnecting", a long one "stale since". */
-export function linkStatus(link: Link, nowMs: number): LinkStatus {
+/**
+ * What the screen says of its line: a short break is "reconnecting", a long one "stale since". The server tells its clock every
+ * ten seconds (last heard at `heardMs`): a line that is silent for long is stale, whatever the socket says.
+ */
+export function linkStatus(link: Link, heardMs: number | null, nowMs: number): LinkStatus {
+  if (link.state === 'live' && heardMs !== null && nowMs - Math.max(heardMs, link.sinceMs) >= STALE_AFTER_MS) return { state: 'stale', sinceMs: heardMs };
   const long = nowMs - link.sinceMs >= STALE_AFTER_MS;
   if (long && (link.state === 'reconnecting' || link.state === 'connecting')) return { state: 'stale', sinceMs: link.sinceMs };
   return { state: link.state, sinceMs: link.sinceMs };

@@ -26,6 +26,7 @@ export interface Session {
 }
 
 const JOIN_ANSWER_MS = 10_000;
+const RETURN_MS = 1000;
 
 /**
  * Keeps one event's store in step with the server: joins with the revision held, joins again when one was missed, and carries on
@@ -38,6 +39,7 @@ export function openSession(
 ): Session {
   const { eventId } = store.getState();
   let stopWaiting: (() => void) | null = null;
+  let stopReturning: (() => void) | null = null;
   let reported = 0;
 
   const tell = (happening: Happening): void => {
@@ -75,9 +77,11 @@ export function openSession(
     reported = 0;
     tell({ kind: 'connected', atMs: nowMs() });
   });
-  socket.on('disconnect', () => {
+  socket.on('disconnect', (reason) => {
     forget();
     tell({ kind: 'disconnected', atMs: nowMs() });
+    // socket.io does not come back by itself when the server ended the connection.
+    if (reason === 'io server disconnect') stopReturning = later(RETURN_MS, () => socket.connect());
   });
   socket.on('connect_error', (error) => {
     if (error.data?.code === 'unauthorized') tell({ kind: 'refused', atMs: nowMs(), code: 'unauthorized', message: error.message });
@@ -105,6 +109,7 @@ export function openSession(
     tell,
     close() {
       forget();
+      stopReturning?.();
       socket.disconnect();
     },
   };

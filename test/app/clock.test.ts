@@ -16,9 +16,13 @@ test('a stopped exercise clock stands still', () => {
   expect(eventMsAt({ eventMs: 1000, heardMs: 0, rate: 0 }, 99_999)).toBe(1000);
 });
 
-test('a short break is reconnecting, a long one is stale, a live line is never stale', () => {
+test('a short break is reconnecting, a long one is stale, a line that is heard is live', () => {
   const lost = { state: 'reconnecting' as const, sinceMs: 0 };
-  expect(linkStatus(lost, STALE_AFTER_MS - 1).state).toBe('reconnecting');
-  expect(linkStatus(lost, STALE_AFTER_MS)).toEqual({ state: 'stale', sinceMs: 0 });
-  expect(linkStatus({ state: 'live', sinceMs: 0 }, 1e9).state).toBe('live');
+  expect(linkStatus(lost, null, STALE_AFTER_MS - 1).state).toBe('reconnecting');
+  expect(linkStatus(lost, null, STALE_AFTER_MS)).toEqual({ state: 'stale', sinceMs: 0 });
+  expect(linkStatus({ state: 'live', sinceMs: 0 }, 1e9 - 10_000, 1e9).state).toBe('live');
+});
+
+test('a line that is called live but tells no clock for long is stale since it was last heard', () => {
+  expect(linkStatus({ state: 'live', sinceMs: 0 }, 1000, 1000 + STALE_AFTER_MS)).toEqual({ state: 'stale', sinceMs: 1000 });
 });

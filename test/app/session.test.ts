@@ -12,11 +12,12 @@ function wire() {
   const listeners = new Map<string, (payload?: unknown) => void>();
   const sent: { name: string; message: unknown; ack?: (answer: JoinAck) => void }[] = [];
   const timers: (() => void)[] = [];
+  let opened = 0;
   const socket = {
     connected: false,
     on: (name: string, listener: (payload?: unknown) => void) => listeners.set(name, listener),
     emit: (name: string, message: unknown, ack?: (answer: JoinAck) => void) => sent.push({ name, message, ack }),
-    connect: () => undefined,
+    connect: () => (opened += 1),
     disconnect: () => hear('disconnect', 'io client disconnect'),
   };
   const hear = (name: string, payload?: unknown): void => {
@@ -32,7 +33,7 @@ function wire() {
       return () => timers.splice(timers.indexOf(run), 1);
     },
   });
-  return { store, session, hear, sent, timers, joins: () => sent.filter((message) => message.name === 'join') };
+  return { store, session, hear, sent, timers, opened: () => opened, joins: () => sent.filter((message) => message.name === 'join') };
 }
 const snapshot = (revision: number): JoinAck => ({
   ok: true,
@@ -74,6 +75,15 @@ describe('a screen', () => {
     expect(line.store.getState().impact).toBeNull();
     line.joins()[1].ack!(snapshot(4));
     expect(line.store.getState().impact?.revision).toBe(4);
+  });
+
+  test('comes back by itself when the server ended the connection', () => {
+    const line = wire();
+    line.hear('connect');
+    line.joins()[0].ack!(snapshot(4));
+    line.hear('disconnect', 'io server disconnect');
+    line.timers[0]();
+    expect(line.opened()).toBe(2);
   });
 
   test('does not listen to another event', () => {
