@@ -2,6 +2,7 @@
 export * from './advisories';
 export * from './events';
 export * from './layers';
+export * from './limits';
 export * from './live';
 export * from './log';
 export * from './roles';

@@ -2,7 +2,7 @@ import { apiKey } from '@better-auth/api-key';
 import { betterAuth } from 'better-auth';
 import { getMigrations } from 'better-auth/db/migration';
 import { magicLink } from 'better-auth/plugins/magic-link';
-import type { AuthConnection } from './connection';
+import type { SharedDatabase } from '../store';
 
 const DAY_SECONDS = 24 * 3600;
 const SESSION_DAYS = 30;
@@ -10,14 +10,15 @@ export const COOKIE_PREFIX = 'leeboard';
 
 /**
  * The auth library, set up: sessions in cookies, sign-in by one-time link, keys for machines. `deliver` is handed each link's
- * token in place of an e-mail.
+ * token in place of an e-mail. It shares the store's query layer, not only its database: SQLite has one writer, and a second
+ * connection of this thread would wait for the store's transaction while keeping it from ending.
  */
-export async function openLibrary(connection: AuthConnection, secret: string, origin: string, deliver: (ticket: string, token: string) => void) {
+export async function openLibrary({ db, engine }: SharedDatabase, secret: string, origin: string, deliver: (ticket: string, token: string) => void) {
   const auth = betterAuth({
     appName: 'Leeboard',
     baseURL: origin,
     secret,
-    database: connection.database,
+    database: { db, type: engine, transaction: true },
     telemetry: { enabled: false },
     // A refused key is an answer, not a fault; faults come as exceptions.
     logger: { disabled: true },

@@ -1,4 +1,4 @@
-import type { Identity, Role } from '../../lib/wire';
+import type { Role } from '../../lib/wire';
 import type { Auth } from '../services';
 
 export interface KeyRecord {
@@ -13,8 +13,6 @@ export interface KeyRecord {
 
 /** People, sessions and keys. Nobody has a password: people come by one-time link or with a key. */
 export interface LeeboardAuth extends Auth {
-  identify(headers: { authorization?: string | undefined; cookie?: string | undefined }): Promise<Identity | null>;
-  identifyKey(key: string): Promise<Identity | null>;
   /** A link that signs one person in, once, within a day. */
   createSignInLink(person: { name: string; role: Role }): Promise<{ url: string; expiresAt: string }>;
   /** The cookie of a new session, or null when the token is unknown, used or out of date. */
@@ -30,5 +28,4 @@ export interface LeeboardAuth extends Auth {
     /** False: no such key. Sessions opened with the key end with it. */
     revoke(id: string): Promise<boolean>;
   };
-  close(): Promise<void>;
 }

@@ -2,7 +2,7 @@ import { createHash, randomUUID, timingSafeEqual } from 'node:crypto';
 import { roleSchema } from '../../lib/wire';
 import type { Identity, Role } from '../../lib/wire';
 import type { Settings } from '../settings';
-import { openConnection } from './connection';
+import type { OpenedStore } from '../store';
 import { keyCache } from './keyCache';
 import { COOKIE_PREFIX, LINK_SECONDS, openLibrary } from './library';
 import type { AuthLibrary } from './library';
@@ -15,13 +15,12 @@ const KEEPER = address('keys');
 
 const digest = (text: string): Buffer => createHash('sha256').update(text).digest();
 
-export type AuthSettings = Pick<Settings, 'DATABASE_URL' | 'DATA_DIR' | 'BOOTSTRAP_KEY' | 'HOST' | 'PORT'>;
+export type AuthSettings = Pick<Settings, 'DATA_DIR' | 'BOOTSTRAP_KEY'>;
 
-/** `origin` is where people reach the server, for links and cookies. */
-export async function openAuth(settings: AuthSettings, origin: string): Promise<LeeboardAuth> {
-  const connection = openConnection(settings);
+/** People, sessions and keys, in the store's own database. `origin` is where people reach the server, for links and cookies. */
+export async function openAuth(store: Pick<OpenedStore, 'shared'>, settings: AuthSettings, origin: string): Promise<LeeboardAuth> {
   const delivered = new Map<string, string>();
-  const library = await openLibrary(connection, sessionSecret(settings.DATA_DIR), origin, (ticket, token) => delivered.set(ticket, token));
+  const library = await openLibrary(store.shared, sessionSecret(settings.DATA_DIR), origin, (ticket, token) => delivered.set(ticket, token));
   const { internalAdapter, adapter } = await library.$context;
   const keeperId = await keeper(library);
   const cache = keyCache(identifyStoredKey);
@@ -66,7 +65,7 @@ export async function openAuth(settings: AuthSettings, origin: string): Promise<
     },
     async createSignInLink({ name, role }) {
       const token = await oneTimeToken(address(`person-${randomUUID()}`), name, role);
-      return { url: `${origin}/api/v1/sign-in?token=${token}`, expiresAt: new Date(Date.now() + LINK_SECONDS * 1000).toISOString() };
+      return { url: `${origin}/sign-in?token=${token}`, expiresAt: new Date(Date.now() + LINK_SECONDS * 1000).toISOString() };
     },
     redeemSignIn,
     async signInWithKey(key) {
@@ -99,7 +98,6 @@ export async function openAuth(settings: AuthSettings, origin: string): Promise<
         return true;
       },
     },
-    close: () => connection.close(),
   };
 }
 

@@ -4,7 +4,7 @@ import type { Advisory } from '../../lib/advisory';
 import type { NewAdvisory, Store } from './model';
 import type { Database } from './openStore';
 import { ADVISORY_COLUMNS, advisoryOf } from './rows';
-import { countOf, listed, lockEvent } from './shared';
+import { bufferOver, countOf, listed, lockEvent } from './shared';
 
 /** Advisories of one storm carry its identifier, or its name where they have none. */
 const stormKey = ({ storm }: Advisory): string => storm.id ?? storm.name;
@@ -39,6 +39,10 @@ export function advisoryStore(database: Database): Store['advisories'] {
       }),
     async get(eventId, id) {
       const row = await chosen(eventId).where('id', '=', id).executeTakeFirst();
+      return row ? advisoryOf(row) : null;
+    },
+    async ofKey(eventId, idempotencyKey) {
+      const row = await chosen(eventId).where('idempotency_key', '=', idempotencyKey).executeTakeFirst();
       return row ? advisoryOf(row) : null;
     },
     async latest(eventId) {
@@ -83,7 +87,7 @@ function rowOf(input: NewAdvisory, sequence: number, supersedes: string | null) 
     received_by: input.receivedBy,
     supersedes,
     idempotency_key: input.idempotencyKey,
-    source: Buffer.from(input.source.bytes),
+    source: bufferOver(input.source.bytes),
     content_type: input.source.contentType,
     file_name: input.source.fileName,
   };

@@ -14,8 +14,6 @@ export interface Engine {
   bytes: RawBuilder<unknown>;
   /** Row locks: SQLite has one writer and needs none. */
   locksRows: boolean;
-  /** The connection itself, for libraries that bring their own tables. */
-  connection: SQLite.Database | pg.Pool;
 }
 
 export function openEngine({ DATABASE_URL, DATA_DIR }: Pick<Settings, 'DATABASE_URL' | 'DATA_DIR'>): Engine {
@@ -30,10 +28,10 @@ function sqlite(file: string, folder: string): Engine {
   connection.pragma('synchronous = FULL');
   connection.pragma('foreign_keys = ON');
   connection.pragma('busy_timeout = 5000');
-  return { name: 'sqlite', dialect: new SqliteDialect({ database: connection }), bytes: sql`blob`, locksRows: false, connection };
+  return { name: 'sqlite', dialect: new SqliteDialect({ database: connection }), bytes: sql`blob`, locksRows: false };
 }
 
 function postgres(url: string): Engine {
   const connection = new pg.Pool({ connectionString: url, max: 8 });
-  return { name: 'postgres', dialect: new PostgresDialect({ pool: connection }), bytes: sql`bytea`, locksRows: true, connection };
+  return { name: 'postgres', dialect: new PostgresDialect({ pool: connection }), bytes: sql`bytea`, locksRows: true };
 }

@@ -1,7 +1,8 @@
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { Store } from './model';
 import type { Database } from './openStore';
 import { impactOf } from './rows';
-import { lockEvent } from './shared';
+import { bufferOver, lockEvent } from './shared';
 
 export function impactStore(database: Database): Store['impacts'] {
   const { db } = database;
@@ -19,8 +20,10 @@ export function impactStore(database: Database): Store['impacts'] {
         for (const [name, bytes] of Object.entries(bulk)) {
           await trx
             .insertInto('bulk')
-            .values({ ...key, name: name as keyof typeof bulk, bytes: Buffer.from(bytes) })
+            .values({ ...key, name: name as keyof typeof bulk, bytes: bufferOver(bytes) })
             .execute();
+          // SQLite writes on this thread: megabytes go in one at a time, and others have their turn between.
+          await nextTurn();
         }
         await trx.updateTable('events').set({ revision: published.revision, advisory_id: impact.advisoryId }).where('id', '=', impact.eventId).execute();
         return published;

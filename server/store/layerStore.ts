@@ -1,15 +1,23 @@
 import { randomUUID } from 'node:crypto';
+import { promisify } from 'node:util';
+import { gunzip, gzip } from 'node:zlib';
 import type { Store } from './model';
 import type { Database } from './openStore';
 import { LAYER_COLUMNS, layerOf } from './rows';
 import { countOf, listed, lockEvent } from './shared';
 
+/** Layers are large and written on this thread: packed (on another thread) they take a fifth of the time and room. */
+const pack = promisify(gzip);
+const unpack = promisify(gunzip);
+const FAST = { level: 1 };
+
 export function layerStore(database: Database): Store['layers'] {
   const { db } = database;
   const chosen = (eventId: string) => db.selectFrom('layers').select(LAYER_COLUMNS).where('event_id', '=', eventId);
   return {
-    add: (input) =>
-      db.transaction().execute(async (trx) => {
+    async add(input) {
+      const packed = await pack(input.source.bytes, FAST);
+      return db.transaction().execute(async (trx) => {
         await lockEvent(database, trx, input.eventId);
         const before = await trx
           .selectFrom('layers')
@@ -30,13 +38,14 @@ export function layerStore(database: Database): Store['layers'] {
           classes: JSON.stringify(input.classes),
           received_at: input.receivedAt,
           received_by: input.receivedBy,
-          source: Buffer.from(input.source.bytes),
+          source: packed,
           content_type: input.source.contentType,
           file_name: input.source.fileName,
         };
         await trx.insertInto('layers').values(row).execute();
         return layerOf(row);
-      }),
+      });
+    },
     async current(eventId) {
       const rows = await chosen(eventId).orderBy('kind').orderBy('name').orderBy('version', 'desc').execute();
       return rows.map(layerOf).filter((layer, i, all) => i === 0 || layer.kind !== all[i - 1].kind || layer.name !== all[i - 1].name);
@@ -47,7 +56,7 @@ export function layerStore(database: Database): Store['layers'] {
     },
     async source(eventId, id) {
       const row = await db.selectFrom('layers').select(['source', 'content_type', 'file_name']).where('event_id', '=', eventId).where('id', '=', id).executeTakeFirst();
-      return row ? { bytes: row.source, contentType: row.content_type, fileName: row.file_name } : null;
+      return row ? { bytes: await unpack(row.source), contentType: row.content_type, fileName: row.file_name } : null;
     },
   };
 }

@@ -7,9 +7,13 @@ import { countOf, listed, lockEvent } from './shared';
 export function logStore(database: Database): Store['log'] {
   const { db } = database;
   return {
-    add: (entry) =>
+    add: (entry, idempotencyKey) =>
       db.transaction().execute(async (trx) => {
         await lockEvent(database, trx, entry.eventId);
+        if (idempotencyKey !== null) {
+          const repeated = await trx.selectFrom('log').selectAll().where('event_id', '=', entry.eventId).where('idempotency_key', '=', idempotencyKey).executeTakeFirst();
+          if (repeated) return { entry: logOf(repeated), repeated: true };
+        }
         const row = {
           id: randomUUID(),
           event_id: entry.eventId,
@@ -20,9 +24,10 @@ export function logStore(database: Database): Store['log'] {
           made_by: entry.by,
           at: entry.at,
           recorded_at: entry.recordedAt,
+          idempotency_key: idempotencyKey,
         };
         await trx.insertInto('log').values(row).execute();
-        return logOf(row);
+        return { entry: logOf(row), repeated: false };
       }),
     async list(eventId, page) {
       const rows = await db.selectFrom('log').selectAll().where('event_id', '=', eventId).orderBy('sequence', 'desc').offset(page.offset).limit(page.limit).execute();

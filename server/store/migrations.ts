@@ -87,7 +87,9 @@ const first = ({ bytes }: Engine): Migration => ({
       .addColumn('made_by', 'text', (c) => c.notNull())
       .addColumn('at', 'text', (c) => c.notNull())
       .addColumn('recorded_at', 'text', (c) => c.notNull())
+      .addColumn('idempotency_key', 'text')
       .addUniqueConstraint('log_sequence', ['event_id', 'sequence'])
+      .addUniqueConstraint('log_idempotency', ['event_id', 'idempotency_key'])
       .execute();
   },
 });

@@ -76,6 +76,8 @@ export interface Store {
     add(input: NewAdvisory): Promise<{ advisory: StoredAdvisory; repeated: boolean }>;
     get(eventId: string, id: string): Promise<StoredAdvisory | null>;
     latest(eventId: string): Promise<StoredAdvisory | null>;
+    /** The advisory that was stored under an idempotency key. */
+    ofKey(eventId: string, idempotencyKey: string): Promise<StoredAdvisory | null>;
     /** The advisory before this one that it does not supersede, to measure change against. */
     before(advisory: StoredAdvisory): Promise<StoredAdvisory | null>;
     list(eventId: string, page: Page): Promise<Listed<StoredAdvisory>>;
@@ -100,7 +102,8 @@ export interface Store {
     bulk(eventId: string, revision: number, name: BulkName): Promise<Uint8Array | null>;
   };
   log: {
-    add(entry: Omit<LogEntry, 'id' | 'sequence'>): Promise<LogEntry>;
+    /** Same key and event: the entry stored the first time is answered again. */
+    add(entry: Omit<LogEntry, 'id' | 'sequence'>, idempotencyKey: string | null): Promise<{ entry: LogEntry; repeated: boolean }>;
     list(eventId: string, page: Page): Promise<Listed<LogEntry>>;
   };
   ping(): Promise<void>;

@@ -17,9 +17,14 @@ export interface Database {
   engine: Engine;
 }
 
+/** The store's query layer, for a library that keeps tables of its own in the same database. */
+export interface SharedDatabase {
+  db: Kysely<never>;
+  engine: Engine['name'];
+}
+
 export interface OpenedStore extends Store {
-  /** For the auth library, which keeps its tables in the same database. */
-  engine: Engine;
+  shared: SharedDatabase;
 }
 
 /** Opens the database that the settings name, bringing its tables up to date. Throws with one line when it cannot. */
@@ -33,7 +38,7 @@ export async function openStore(settings: Pick<Settings, 'DATABASE_URL' | 'DATA_
   }
   const database: Database = { db, engine };
   return {
-    engine,
+    shared: { db: db as unknown as Kysely<never>, engine: engine.name },
     events: eventStore(database),
     advisories: advisoryStore(database),
     layers: layerStore(database),

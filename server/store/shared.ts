@@ -25,3 +25,6 @@ export async function countOf(db: Db, table: 'advisories' | 'layers' | 'log', ev
 }
 
 export const listed = <T>(items: T[], total: number, { offset }: Page): Listed<T> => ({ items, total, offset });
+
+/** The same bytes as both drivers want them, not copied. */
+export const bufferOver = (bytes: Uint8Array): Buffer => Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength);

@@ -57,5 +57,6 @@ export interface Tables {
     made_by: string;
     at: string;
     recorded_at: string;
+    idempotency_key: string | null;
   };
 }

@@ -126,8 +126,8 @@ describe.each(ENGINES)('the store on %s', (_, open) => {
 
   test('the log only grows, newest first', async () => {
     const entry = (text: string) => ({ eventId, kind: 'decision' as const, text, zoneId: null, by: 'Mara', at: '2031-09-19T09:00:00.000Z', recordedAt: '2026-12-01T10:00:00.000Z' });
-    await opened.store.log.add(entry('Saltmarsh ordered'));
-    await opened.store.log.add(entry('Crews stop at 18:00'));
+    await opened.store.log.add(entry('Saltmarsh ordered'), null);
+    await opened.store.log.add(entry('Crews stop at 18:00'), null);
     const { items, total } = await opened.store.log.list(eventId, { offset: 0, limit: 1 });
     expect(total).toBe(2);
     expect(items[0]).toMatchObject({ sequence: 2, text: 'Crews stop at 18:00' });

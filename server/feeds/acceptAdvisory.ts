@@ -1,0 +1,76 @@
+import { decodeText, readAdvisory } from '../../lib/advisory';
+import type { Advisory, InputError, ReadOptions, Reading } from '../../lib/advisory';
+import { eventNowMs } from '../../lib/wire';
+import type { StoredAdvisory } from '../../lib/wire';
+import type { Services } from '../services';
+import type { EventRecord, Source } from '../store';
+
+/** An exercise that was given no clock starts this long after the first advisory put into it. */
+const CLOCK_STARTS_AFTER_MS = 2 * 3_600_000;
+
+/** How the sender says a file is to be read; without it, the form is told from the content. */
+export type HowToRead = Pick<ReadOptions, 'format' | 'technique' | 'cycle'>;
+
+export interface Received {
+  event: EventRecord;
+  source: Source;
+  how?: HowToRead;
+  /** Name of whoever sent it. */
+  by: string;
+  /** Same key and event again: the same answer again, and nothing new. */
+  idempotencyKey: string | null;
+}
+
+export type Accepted =
+  | { ok: true; advisory: StoredAdvisory; revision: number; repeated: boolean }
+  | { ok: false; reason: 'unreadable' | 'key-reused'; errors: InputError[] };
+
+type Needed = Pick<Services, 'store' | 'bus' | 'runs' | 'clock'>;
+
+/** Reads and checks a file as it was received, against the event's clock and the advisory before it. Stores nothing. */
+export async function readReceived({ store, clock }: Pick<Needed, 'store' | 'clock'>, { event, source, how = {} }: Pick<Received, 'event' | 'source' | 'how'>): Promise<Reading> {
+  const decoded = decodeText(source.bytes);
+  if (!decoded.ok) return { ok: false, format: how.format ?? null, errors: [{ message: decoded.message }] };
+  const previous = await store.advisories.latest(event.id);
+  return readAdvisory(decoded.text, { ...how, nowMs: eventNowMs(event.clock, clock.nowMs()), ...(previous ? { previous } : {}) });
+}
+
+/**
+ * The one way in: whichever way an advisory came, it is read, checked, on disk, made known and asked to be computed, in this
+ * order. When this resolves with `ok`, the advisory outlives the process.
+ */
+export async function acceptAdvisory(services: Needed, received: Received): Promise<Accepted> {
+  const { store, bus, runs, clock } = services;
+  const { event, source, idempotencyKey } = received;
+  const reading = await readReceived(services, received);
+  if (!reading.ok) return { ok: false, reason: 'unreadable', errors: reading.errors };
+
+  const { advisory, repeated } = await store.advisories.add({
+    eventId: event.id,
+    advisory: reading.advisory,
+    format: reading.format,
+    warnings: reading.warnings,
+    source,
+    receivedAt: new Date(clock.nowMs()).toISOString(),
+    receivedBy: received.by,
+    idempotencyKey,
+  });
+  if (repeated) {
+    const first = await store.advisories.source(event.id, advisory.id);
+    if (!first || Buffer.compare(first.bytes, source.bytes) !== 0) {
+      return { ok: false, reason: 'key-reused', errors: [{ message: `the Idempotency-Key was used before, for advisory ${advisory.number}, with other content: give each advisory a key of its own` }] };
+    }
+  } else {
+    if (event.exercise && event.clock === null) await startClock(services, event.id, reading.advisory);
+    bus.emit('advisory', { eventId: event.id, advisory });
+    runs.request(event.id);
+  }
+  const { revision } = (await store.events.get(event.id))!;
+  return { ok: true, advisory, revision, repeated };
+}
+
+async function startClock({ store, bus, clock }: Needed, eventId: string, { issuedAt }: Advisory): Promise<void> {
+  const startsAt = new Date(Date.parse(issuedAt) + CLOCK_STARTS_AFTER_MS).toISOString();
+  await store.events.setClock(eventId, { startsAt, anchoredAt: new Date(clock.nowMs()).toISOString(), rate: 1 });
+  bus.emit('event', { eventId });
+}

@@ -1,0 +1,33 @@
+import type { InputError } from '../../lib/advisory';
+
+/** Every way a request can be refused, with its HTTP status and its title in a problem document (RFC 9457). */
+export const REFUSALS = {
+  'bad-request': [400, 'The request cannot be understood'],
+  unauthorized: [401, 'Sign in, or send a key'],
+  forbidden: [403, 'Your role does not allow this'],
+  'foreign-origin': [403, 'This call comes from another site'],
+  'not-found': [404, 'There is no such thing here'],
+  'not-computed': [404, 'Not computed'],
+  conflict: [409, 'This cannot be done now'],
+  'too-large': [413, 'The file is too large'],
+  'wrong-type': [415, 'This kind of content is not read here'],
+  'unknown-host': [421, 'This server does not answer under that name'],
+  invalid: [422, 'The content cannot be used'],
+  'too-many-requests': [429, 'Too many requests'],
+  fault: [500, 'Something went wrong on the server'],
+  'not-ready': [503, 'The server is not ready'],
+} as const satisfies Record<string, readonly [status: number, title: string]>;
+
+export type RefusalCode = keyof typeof REFUSALS;
+
+/** Thrown wherever a request must be refused; what a client reads is made of it in one place (`answerProblem`). */
+export class Refusal extends Error {
+  override name = 'Refusal';
+  constructor(
+    readonly code: RefusalCode,
+    readonly detail: string,
+    readonly errors: readonly InputError[] = [],
+  ) {
+    super(detail);
+  }
+}
