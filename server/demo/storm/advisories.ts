@@ -1,8 +1,6 @@
 import type { Advisory, Point } from '../../../lib/advisory';
-import { centreAt, stormAt } from '../../../lib/track';
-import type { Track } from '../../../lib/track';
 import { five, ringsOf } from './rings';
-import { instantAt, truth } from './truth';
+import { instantAt, truthAt } from './truth';
 
 export const STORM = { id: 'LB072031', name: 'Quillon' };
 const CENTRE = 'LAMBREY WEATHER SERVICE PORT ANSEL';
@@ -33,15 +31,12 @@ const LANDFALL_HOUR = 42;
 const LEAST_WIND_KT = 35;
 
 /** The eight advisories of the storm, in order, as a bulletin can carry them. */
-export function makeAdvisories(): Advisory[] {
-  const track = truth();
-  return ERRORS.map((_, i) => advisoryOf(track, i));
-}
+export const makeAdvisories = (): Advisory[] => ERRORS.map((_, i) => advisoryOf(i));
 
-function advisoryOf(track: Track, i: number): Advisory {
+function advisoryOf(i: number): Advisory {
   const issued = i * HOURS_APART;
   const { pressureHpa, eyeDiameterNm } = ERRORS[i];
-  const now = pointAt(track, i, issued, 0);
+  const now = pointAt(i, issued, 0);
   return {
     storm: STORM,
     number: String(i + 1),
@@ -49,28 +44,28 @@ function advisoryOf(track: Track, i: number): Advisory {
     issuedAt: instantAt(issued),
     nextDueAt: instantAt(issued + HOURS_APART),
     averaging: '1-min',
-    points: [{ ...now, minPressureHpa: pressureHpa, ...(eyeDiameterNm === undefined ? {} : { eyeDiameterNm }) }, ...LEAD_HOURS.map((lead) => pointAt(track, i, issued - SYNOPTIC_HOURS + lead, lead))],
+    points: [{ ...now, minPressureHpa: pressureHpa, ...(eyeDiameterNm === undefined ? {} : { eyeDiameterNm }) }, ...LEAD_HOURS.map((lead) => pointAt(i, issued - SYNOPTIC_HOURS + lead, lead))],
   };
 }
 
-function pointAt(track: Track, i: number, hour: number, leadHours: number): Point {
+function pointAt(i: number, hour: number, leadHours: number): Point {
   const issued = i * HOURS_APART;
   const { pace, westDeg, tooWeakKt } = ERRORS[i];
   const after = hour - issued;
   const along = issued + pace * after;
-  const centre = centreAt(track, along)!;
+  const storm = truthAt(along);
   const landfallAfter = (LANDFALL_HOUR - issued) / pace;
   const share = landfallAfter > 0 ? Math.min(1.4, after / landfallAfter) : 0;
-  const maxWindKt = Math.max(LEAST_WIND_KT, five(stormAt(track, along)!.maxWindKt - tooWeakKt * Math.min(1, share)));
+  const maxWindKt = Math.max(LEAST_WIND_KT, five(storm.maxWindKt - tooWeakKt * Math.min(1, share)));
   const radiiNm = ringsOf(maxWindKt, along, leadHours);
   return {
     validAt: instantAt(hour),
-    lat: tenth(centre.lat),
-    lon: tenth(centre.lon - westDeg * share),
+    lat: tenth(storm.lat),
+    lon: tenth(storm.lon - westDeg * share),
     maxWindKt,
     gustKt: five(maxWindKt * 1.22),
     ...(Object.keys(radiiNm).length === 0 ? {} : { radiiNm }),
-    stage: centre.lat > EXTRATROPICAL_FROM_LAT ? 'post-tropical' : 'tropical',
+    stage: storm.lat > EXTRATROPICAL_FROM_LAT ? 'post-tropical' : 'tropical',
   };
 }
 

@@ -1,13 +1,15 @@
-import type { Advisory, Point } from '../../../lib/advisory';
-import { makeTrack } from '../../../lib/track';
-import type { Track } from '../../../lib/track';
-
 const HOUR_MS = 3_600_000;
 
 /** Issue time of the first advisory; hours of the story count from here. */
 const START_MS = Date.UTC(2031, 8, 18, 9);
 
-export const instantAt = (hours: number): string => `${new Date(START_MS + hours * HOUR_MS).toISOString().slice(0, 19)}Z`;
+export const instantAt = (hour: number): string => `${new Date(START_MS + hour * HOUR_MS).toISOString().slice(0, 19)}Z`;
+
+export interface Storm {
+  lat: number;
+  lon: number;
+  maxWindKt: number;
+}
 
 /** What the storm in the end does: `[hour, lat, lon, wind kt]`. It comes ashore by the mouth of the Ansel at hour 42. */
 const WAY: readonly (readonly [number, number, number, number])[] = [
@@ -32,7 +34,23 @@ const WAY: readonly (readonly [number, number, number, number])[] = [
   [168, 55.0, 8.0, 35],
 ];
 
-/** The true storm as a track, leads counted from the first advisory. */
-export const truth = (): Track => makeTrack(advisoryOf(WAY.map(([hour, lat, lon, maxWindKt]): Point => ({ validAt: instantAt(hour), lat, lon, maxWindKt }))));
-
-const advisoryOf = (points: Point[]): Advisory => ({ storm: { name: 'Quillon' }, number: '0', centre: 'Analysis', issuedAt: instantAt(0), averaging: '1-min', points });
+/**
+ * The true storm at an hour of the story. Position by a cubic through the six-hourly points with slopes from their neighbours
+ * (Catmull and Rom, 1974), wind straight between them. The story's own, so that the bulletins change only when the story does.
+ */
+export function truthAt(hour: number): Storm {
+  const last = WAY.length - 1;
+  let k = 0;
+  while (k < last - 1 && hour >= WAY[k + 1][0]) k++;
+  const [from, to] = [WAY[k], WAY[k + 1]];
+  const f = (hour - from[0]) / (to[0] - from[0]);
+  const curve = (column: 1 | 2): number => {
+    const step = to[0] - from[0];
+    const [before, after] = [WAY[Math.max(0, k - 1)], WAY[Math.min(last, k + 2)]];
+    const slopeFrom = (step * (to[column] - before[column])) / (to[0] - before[0]);
+    const slopeTo = (step * (after[column] - from[column])) / (after[0] - from[0]);
+    const [a, b] = [from[column], to[column]];
+    return a + f * (slopeFrom + f * (3 * (b - a) - 2 * slopeFrom - slopeTo + f * (2 * (a - b) + slopeFrom + slopeTo)));
+  };
+  return { lat: curve(1), lon: curve(2), maxWindKt: from[3] + f * (to[3] - from[3]) };
+}

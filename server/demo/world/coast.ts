@@ -1,9 +1,10 @@
 import { contours } from 'd3-contour';
-import type { Feature, FeatureCollection, MultiPolygon, Polygon, Position } from 'geojson';
-import { makeLandMask } from '../../../lib/geo';
-import type { LandMask } from '../../../lib/geo';
-import { gridOf, latOf, lonOf, round4, sampleGrid } from './frame';
+import type { Feature, FeatureCollection, Polygon, Position } from 'geojson';
+import { gridOf, kmOf, latOf, lonOf, round4, sampleGrid } from './frame';
 import type { Grid } from './frame';
+import { makeLand } from './land';
+import type { Land } from './land';
+import { mix } from './noise';
 import { ringAreaKm2, thinned } from './rings';
 import type { Terrain } from './terrain';
 
@@ -14,15 +15,13 @@ const LEAST_LAKE_KM2 = 3;
 /** Corners closer than this to the line without them are left out. */
 const TOLERANCE_KM = 0.07;
 
-export const BOUNDS = { west: -52, south: 23, east: -45, north: 27.5 };
-
 /** The country's coast, largest island first; lakes are holes. */
 export function makeCoast(terrain: Terrain): FeatureCollection<Polygon> {
-  const offshore = distanceFromBody(terrain);
+  const offshoreKm = offshoreOf(terrain);
   const grid = gridOf(STEP_KM);
   const field = sampleGrid(grid, (x, y) => {
     const land = terrain.land(x, y);
-    return land > 0 ? land : Math.max(land, terrain.barrier(x, y, -offshore.coastDistanceKm(latOf(y), lonOf(x))));
+    return land > 0 ? land : Math.max(land, terrain.barrier(x, y, offshoreKm(x, y)));
   });
   const polygons = contourKm(grid, field, 0)
     .map((rings) => rings.map((ring) => thinned(ring, TOLERANCE_KM)))
@@ -41,12 +40,20 @@ export function contourKm({ west, south, stepKm, columns, rows }: Grid, field: F
 
 export const inDegrees = (ring: Position[]): Position[] => ring.map(([x, y]) => [round4(lonOf(x)), round4(latOf(y))]);
 
-export const landMaskOf = (coast: FeatureCollection<Polygon>, cellKm: number): LandMask => makeLandMask(multi(coast.features.map(({ geometry }) => geometry.coordinates)), BOUNDS, cellKm);
+/** The land of a coast in degrees, as it ships. */
+export const landOf = (coast: FeatureCollection<Polygon>): Land =>
+  makeLand(coast.features.map(({ geometry }) => geometry.coordinates.map((ring) => ring.map(([lon, lat]) => [kmOf(lat, lon).x, kmOf(lat, lon).y]))));
 
-const multi = (coordinates: Position[][][]): MultiPolygon => ({ type: 'MultiPolygon', coordinates });
-
-function distanceFromBody(terrain: Terrain): LandMask {
+/** How far (km) a place is from the body of the main island: from samples a km apart, since the barrier coast asks everywhere. */
+function offshoreOf(terrain: Terrain): (x: number, y: number) => number {
   const grid = gridOf(1);
-  const rings = contourKm(grid, sampleGrid(grid, terrain.body), 0);
-  return makeLandMask(multi(rings.map((polygon) => polygon.map(inDegrees))), BOUNDS, 1);
+  const body = makeLand(contourKm(grid, sampleGrid(grid, terrain.body), 0));
+  const samples = sampleGrid(grid, (x, y) => -body.inlandKm(x, y));
+  return (x, y) => {
+    const column = Math.min(grid.columns - 2, Math.floor((x - grid.west) / grid.stepKm));
+    const row = Math.min(grid.rows - 2, Math.floor((y - grid.south) / grid.stepKm));
+    const fx = (x - grid.west) / grid.stepKm - column;
+    const i = row * grid.columns + column;
+    return mix(mix(samples[i], samples[i + 1], fx), mix(samples[i + grid.columns], samples[i + grid.columns + 1], fx), (y - grid.south) / grid.stepKm - row);
+  };
 }

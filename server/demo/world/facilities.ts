@@ -1,6 +1,6 @@
-import type { LandMask } from '../../../lib/geo';
 import { placeOf } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import type { Town } from './places';
 import type { Cell } from './population';
 import type { Random } from './random';
@@ -27,7 +27,7 @@ interface World {
   towns: readonly Town[];
   cells: readonly Cell[];
   roads: Roads;
-  land: LandMask;
+  land: Land;
   random: Random;
 }
 

@@ -1,5 +1,5 @@
 import type { FeatureCollection, LineString, MultiPolygon, Polygon } from 'geojson';
-import { landMaskOf, makeCoast } from './coast';
+import { landOf, makeCoast } from './coast';
 import { makeBridges, makeDepots, makeHospitals, makeShelters } from './facilities';
 import type { Site } from './facilities';
 import { makeNetwork } from './network';
@@ -37,7 +37,7 @@ export interface World {
 export function makeWorld(seed: number): World {
   const terrain = makeTerrain(seed);
   const coast = makeCoast(terrain);
-  const land = landMaskOf(coast, 0.4);
+  const land = landOf(coast);
   const towns = townsOf(land);
   const roads = makeRoads(terrain, land, towns);
   const cells = makePopulation(terrain, land, towns, roads, seed + 1);

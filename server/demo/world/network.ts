@@ -1,8 +1,8 @@
 import type { Feature, FeatureCollection, LineString } from 'geojson';
-import type { LandMask } from '../../../lib/geo';
 import type { Site } from './facilities';
 import { placeOf } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import type { Cell } from './population';
 import type { Random } from './random';
 import { drawer, near, nearestIndex, numbered, spread } from './spots';
@@ -11,6 +11,8 @@ const SUBSTATIONS = 420;
 const FEEDERS = 3000;
 const PEOPLE_PER_CUSTOMER = 2.3;
 const POLES_PER_KM = 21;
+/** Poles of side lines, by customer. */
+const SERVICE_POLES = 0.11;
 const LEAST_FEEDERS = 3;
 
 export interface Substation extends Site {
@@ -21,26 +23,29 @@ export interface Substation extends Site {
 export type Feeder = Feature<LineString, { id: string; name: string; class: 'feeder'; people: number; poles: number; substation: string }>;
 
 /** Substations where people are, and the feeders that leave each for the cells it serves. */
-export function makeNetwork(cells: readonly Cell[], names: Iterator<string, never>, land: LandMask, random: Random): { substations: Substation[]; feeders: FeatureCollection<LineString, Feeder['properties']> } {
+export function makeNetwork(cells: readonly Cell[], names: Iterator<string, never>, land: Land, random: Random): { substations: Substation[]; feeders: FeatureCollection<LineString, Feeder['properties']> } {
   const spots = spread(SUBSTATIONS, 1.3, drawer(cells, ({ people }) => people ** 0.72, random), land, random);
   const served: Cell[][] = spots.map(() => []);
   for (const cell of cells) served[nearestIndex(spots, cell)].push(cell);
-  const stations = spots.map((spot, i): Substation => ({ name: `${names.next().value} Substation`, ...placeOf(spot.x, spot.y), id: numbered('U', i, 3), class: 'substation', people: customersOf(served[i]) }));
-  const counts = feederCounts(stations);
-  const features = stations.flatMap((station, i) =>
-    sectors(spots[i], served[i], counts[i]).map((sector, k) => feederOf(station, spots[i], sector, k, land, random)),
-  );
-  features.forEach((feeder, i) => (feeder.properties.id = numbered('F', i, 4)));
-  return { substations: stations, feeders: { type: 'FeatureCollection', features } };
+  const counts = feederCounts(served.map(customersOf));
+  const features: Feeder[] = [];
+  const substations = spots.map((spot, i): Substation => {
+    const id = numbered('U', i, 3);
+    const name = names.next().value;
+    const lines = sectors(spot, served[i], counts[i]).map((sector) => feederOf(spot, sector, land, random));
+    lines.forEach(({ geometry, ...load }, k) => features.push({ type: 'Feature', properties: { id: numbered('F', features.length, 4), name: `${name} feeder ${k + 1}`, class: 'feeder', ...load, substation: id }, geometry }));
+    return { name: `${name} Substation`, ...placeOf(spot.x, spot.y), id, class: 'substation', people: lines.reduce((sum, { people }) => sum + people, 0) };
+  });
+  return { substations, feeders: { type: 'FeatureCollection', features } };
 }
 
 const customersOf = (cells: readonly Cell[]): number => Math.max(1, Math.round(cells.reduce((sum, { people }) => sum + people, 0) / PEOPLE_PER_CUSTOMER));
 
 /** Feeders by substation, in proportion to the square root of its customers, adding up to the total (largest remainders). */
-function feederCounts(stations: readonly Substation[]): number[] {
-  const weights = stations.map(({ people }) => Math.sqrt(people));
+function feederCounts(customers: readonly number[]): number[] {
+  const weights = customers.map(Math.sqrt);
   const sum = weights.reduce((total, weight) => total + weight, 0);
-  const exact = weights.map((weight) => LEAST_FEEDERS + ((FEEDERS - LEAST_FEEDERS * stations.length) * weight) / sum);
+  const exact = weights.map((weight) => LEAST_FEEDERS + ((FEEDERS - LEAST_FEEDERS * customers.length) * weight) / sum);
   const counts = exact.map(Math.floor);
   const left = FEEDERS - counts.reduce((total, count) => total + count, 0);
   const byRemainder = exact.map((value, i) => ({ i, remainder: value - Math.floor(value) })).sort((a, b) => b.remainder - a.remainder || a.i - b.i);
@@ -76,19 +81,16 @@ function shared(round: readonly Cell[], k: number, count: number, spot: Km): Sec
   return { cells: [round[k % round.length]], share: round.length / count };
 }
 
-/** A line from the substation outward through its wedge. */
-function feederOf(station: Substation, spot: Km, { cells, share }: Sector, k: number, land: LandMask, random: Random): Feeder {
+/** A line from the substation outward through its wedge, its customers and its poles. */
+function feederOf(spot: Km, { cells, share }: Sector, land: Land, random: Random): { people: number; poles: number; geometry: LineString } {
   const outward = [...cells].sort((a, b) => away(spot, a) - away(spot, b));
   const stops = Math.min(7, Math.max(2, outward.length));
   const line: Km[] = [spot];
   for (let stop = 0; stop < stops; stop++) line.push(near(outward[Math.floor(((stop + 0.7) * outward.length) / stops)], land, random));
   const lengthKm = line.slice(1).reduce((sum, to, i) => sum + away(line[i], to), 0);
   const people = Math.max(1, Math.round(customersOf(cells) * share));
-  return {
-    type: 'Feature',
-    properties: { id: '', name: `${station.name.replace(' Substation', '')} feeder ${k + 1}`, class: 'feeder', people, poles: Math.max(8, Math.round(lengthKm * POLES_PER_KM + people * 0.11)), substation: station.id },
-    geometry: { type: 'LineString', coordinates: line.map(({ x, y }) => Object.values(placeOf(x, y)).reverse()) },
-  };
+  const coordinates = line.map(({ x, y }) => placeOf(x, y)).map(({ lat, lon }) => [lon, lat]);
+  return { people, poles: Math.max(8, Math.round(lengthKm * POLES_PER_KM + people * SERVICE_POLES)), geometry: { type: 'LineString', coordinates } };
 }
 
 const away = (a: Km, b: Km): number => Math.hypot(a.x - b.x, a.y - b.y);

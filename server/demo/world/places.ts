@@ -1,6 +1,5 @@
-import type { LandMask } from '../../../lib/geo';
-import { latOf, lonOf } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 
 /** A town: `rank` 1 is the city, 4 the smallest that a map names. `isle`: no road leads there. */
 export interface Town extends Km {
@@ -57,24 +56,22 @@ const ISLES: readonly Row[] = [
 /** Distance (km) from the coast that keeps a place on land once its coordinates are rounded and the coast is thinned. */
 export const SAFE_KM = 0.25;
 
-export function townsOf(land: LandMask): Town[] {
+export function townsOf(land: Land): Town[] {
   const rows = [...MAINLAND.map((row) => ({ row, isle: false })), ...ISLES.map((row) => ({ row, isle: true }))];
   return rows.map(({ row: [name, x, y, thousands, rank], isle }) => ({ name, ...ashore(land, { x, y }), people: thousands * 1000, rank, isle }));
 }
 
 /** The nearest place to a wish that is safely on land. */
-export function ashore(land: LandMask, wish: Km): Km {
+export function ashore(land: Land, wish: Km): Km {
   for (let reach = 0; reach < 30; reach += 0.3) {
     for (let k = 0; k < 24; k++) {
       const x = wish.x + reach * Math.cos((k * Math.PI) / 12);
       const y = wish.y + reach * Math.sin((k * Math.PI) / 12);
-      if (inlandKm(land, x, y) > 0.6) return { x, y };
+      if (land.inlandKm(x, y) > 0.6) return { x, y };
     }
   }
   throw new Error(`No land within 30 km of ${wish.x}, ${wish.y} km.`);
 }
-
-export const inlandKm = (land: LandMask, x: number, y: number): number => land.coastDistanceKm(latOf(y), lonOf(x));
 
 const FIRST = ['Alder', 'Bracken', 'Cinder', 'Drift', 'Ember', 'Fallow', 'Gorse', 'Hobb', 'Ivy', 'Sorrel', 'Kelp', 'Lark', 'Mallow', 'Nettle', 'Otter', 'Plover', 'Quern', 'Rush', 'Sedge', 'Thrift', 'Umber', 'Vetch', 'Whin', 'Yarrow', 'Curlew', 'Teasel', 'Tansy', 'Withy'];
 const LAST = ['wick', 'stead', ' Ness', 'holme', ' Strand', 'combe', ' Hythe', ' Gate', ' Pool', ' Fleet', 'garth', ' Reach', ' Landing', ' Creek', 'marsh'];

@@ -1,9 +1,9 @@
 import KDBush from 'kdbush';
-import type { LandMask } from '../../../lib/geo';
 import { gridOf, sampleGrid } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import { makeNoise, octaves, ramp } from './noise';
-import { inlandKm, SAFE_KM } from './places';
+import { SAFE_KM } from './places';
 import type { Town } from './places';
 import type { Roads } from './roads';
 import type { Terrain } from './terrain';
@@ -18,14 +18,14 @@ const TOTAL_PEOPLE = 2_400_000;
 const SHARES = { towns: 0.8, roads: 0.13, country: 0.07 };
 
 /** People by cell of about 0.84 km: only where somebody lives. */
-export function makePopulation(terrain: Terrain, land: LandMask, towns: readonly Town[], roads: Roads, seed: number): Cell[] {
+export function makePopulation(terrain: Terrain, land: Land, towns: readonly Town[], roads: Roads, seed: number): Cell[] {
   const grid = gridOf(STEP_KM);
   const patch = octaves(makeNoise(seed), 5, 0.7);
   const nearRoad = nearestRoad(roads);
   const kinds: Km[] = [];
   const shares = { towns: [] as number[], roads: [] as number[], country: [] as number[] };
   sampleGrid(grid, (x, y) => {
-    const inland = inlandKm(land, x, y);
+    const inland = land.inlandKm(x, y);
     if (inland < SAFE_KM) return 0;
     const height = terrain.heightM(x, y, inland);
     const texture = Math.exp(1.1 * patch(x / 9, y / 9));

@@ -1,6 +1,6 @@
-import type { LandMask } from '../../../lib/geo';
 import type { Site } from './facilities';
 import { placeOf } from './frame';
+import type { Land } from './land';
 import type { Town } from './places';
 import type { Cell } from './population';
 import type { Random } from './random';
@@ -26,7 +26,7 @@ export interface Property extends Site {
 }
 
 /** Insured buildings where people live. A deductible is a percentage of the value, as wind policies have it. */
-export function makeProperties(towns: readonly Town[], cells: readonly Cell[], land: LandMask, random: Random): Property[] {
+export function makeProperties(towns: readonly Town[], cells: readonly Cell[], land: Land, random: Random): Property[] {
   const draw = drawer(cells, ({ people }) => people, random);
   const kinds = CONSTRUCTION.flatMap((kind) => Array.from({ length: kind.percent }, () => kind));
   return Array.from({ length: PROPERTIES }, (_, i) => {

@@ -1,8 +1,8 @@
-import type { LandMask } from '../../../lib/geo';
 import { gridOf } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import { mix } from './noise';
-import { inlandKm, SAFE_KM } from './places';
+import { SAFE_KM } from './places';
 import type { Town } from './places';
 import type { Terrain } from './terrain';
 
@@ -23,13 +23,13 @@ const APART_KM = 2.5;
 const STEPS = [[1, 0], [-1, 0], [0, 1], [0, -1], [1, 1], [1, -1], [-1, 1], [-1, -1]] as const;
 
 /** Roads between towns: each to its nearest that the net does not hold yet, and cross-links where the way round is long. */
-export function makeRoads(terrain: Terrain, land: LandMask, towns: readonly Town[]): Roads {
+export function makeRoads(terrain: Terrain, land: Land, towns: readonly Town[]): Roads {
   const grid = gridOf(STEP_KM);
   const inland = new Float64Array(grid.columns * grid.rows);
   const cost = new Float64Array(grid.columns * grid.rows);
   for (let i = 0; i < cost.length; i++) {
     const { x, y } = kmAt(i);
-    inland[i] = inlandKm(land, x, y);
+    inland[i] = land.inlandKm(x, y);
     cost[i] = inland[i] > 0 ? 1 + terrain.heightM(x, y, inland[i]) / 70 : WATER_COST;
   }
   const lines: Km[][] = [];
@@ -75,14 +75,14 @@ export function makeRoads(terrain: Terrain, land: LandMask, towns: readonly Town
 }
 
 /** Where a road leaves land and comes ashore again, asked every quarter of a km. */
-function crossingsOf(land: LandMask, line: readonly Km[]): Crossing[] {
+function crossingsOf(land: Land, line: readonly Km[]): Crossing[] {
   const found: Crossing[] = [];
   let bank: Km | null = null;
   let wet = false;
   for (let k = 1; k < line.length; k++) {
     for (let part = 0; part < 1; part += 0.25) {
       const here = { x: mix(line[k - 1].x, line[k].x, part), y: mix(line[k - 1].y, line[k].y, part) };
-      if (inlandKm(land, here.x, here.y) < SAFE_KM) {
+      if (land.inlandKm(here.x, here.y) < SAFE_KM) {
         wet = true;
         continue;
       }

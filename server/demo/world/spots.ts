@@ -1,6 +1,6 @@
-import type { LandMask } from '../../../lib/geo';
 import type { Km } from './frame';
-import { inlandKm, SAFE_KM } from './places';
+import type { Land } from './land';
+import { SAFE_KM } from './places';
 import type { Town } from './places';
 import type { Cell } from './population';
 import type { Random } from './random';
@@ -10,11 +10,11 @@ import { squared } from './shapes';
 const HALF_CELL_KM = 0.42;
 
 /** A place in or beside a cell, on land. */
-export function near(cell: Km, land: LandMask, random: Random, reachKm = HALF_CELL_KM): Km {
+export function near(cell: Km, land: Land, random: Random, reachKm = HALF_CELL_KM): Km {
   for (let k = 0; k < 40; k++) {
     const x = cell.x + random.between(-reachKm, reachKm);
     const y = cell.y + random.between(-reachKm, reachKm);
-    if (inlandKm(land, x, y) >= SAFE_KM) return { x, y };
+    if (land.inlandKm(x, y) >= SAFE_KM) return { x, y };
   }
   return cell;
 }
@@ -27,7 +27,7 @@ export function drawer(cells: readonly Cell[], weight: (cell: Cell) => number, r
 }
 
 /** Places drawn by weight, no two nearer than `apartKm`, so that services spread as they do. */
-export function spread(count: number, apartKm: number, draw: () => Cell, land: LandMask, random: Random): Km[] {
+export function spread(count: number, apartKm: number, draw: () => Cell, land: Land, random: Random): Km[] {
   const spots: Km[] = [];
   for (let tries = 0; spots.length < count; tries++) {
     if (tries > count * 2000) throw new Error(`Only ${spots.length} of ${count} places lie ${apartKm} km apart.`);

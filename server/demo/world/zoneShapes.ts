@@ -1,11 +1,10 @@
 import { bbox, feature, featureCollection, intersect, point, polygon, voronoi } from '@turf/turf';
 import type { Feature, FeatureCollection, MultiPolygon, Polygon, Position } from 'geojson';
-import type { LandMask } from '../../../lib/geo';
 import { contourKm, inDegrees } from './coast';
 import { gridOf, round4, sampleGrid } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import { makeNoise } from './noise';
-import { inlandKm } from './places';
 import { ringAreaKm2, thinned } from './rings';
 import type { Terrain } from './terrain';
 
@@ -16,10 +15,10 @@ const LEAST_PIECE_DEG2 = 2e-5;
 const LEAST_PATCH_KM2 = 40;
 
 /** The low land of the country, island by island: what the zones share out. */
-export function lowLand(terrain: Terrain, land: LandMask, coast: FeatureCollection<Polygon>): Feature<Polygon | MultiPolygon>[] {
+export function lowLand(terrain: Terrain, land: Land, coast: FeatureCollection<Polygon>): Feature<Polygon | MultiPolygon>[] {
   const grid = gridOf(0.8);
   const lowness = sampleGrid(grid, (x, y) => {
-    const inland = inlandKm(land, x, y);
+    const inland = land.inlandKm(x, y);
     return inland <= 0 ? LOW_M : LOW_M - terrain.heightM(x, y, inland);
   });
   const patches = contourKm(grid, lowness, 0)

@@ -1,10 +1,9 @@
 import { bbox, booleanPointInPolygon } from '@turf/turf';
 import type { Feature, FeatureCollection, MultiPolygon, Polygon } from 'geojson';
-import type { LandMask } from '../../../lib/geo';
 import { placeOf } from './frame';
 import type { Km } from './frame';
+import type { Land } from './land';
 import type { Cell } from './population';
-import { inlandKm } from './places';
 import type { Town } from './places';
 import { squared } from './shapes';
 import type { Terrain } from './terrain';
@@ -21,8 +20,8 @@ const QUARTERS: readonly (Km & { name: string })[] = [
 ];
 
 /** Evacuation zones over the coastal and low land, each around a town or a village. */
-export function makeZones(terrain: Terrain, land: LandMask, coast: FeatureCollection<Polygon>, towns: readonly Town[], cells: readonly Cell[], names: Iterator<string, never>, seed: number): FeatureCollection<Polygon | MultiPolygon, ZoneFeature['properties']> {
-  const low = cells.filter(({ x, y }) => terrain.heightM(x, y, inlandKm(land, x, y)) < 18);
+export function makeZones(terrain: Terrain, land: Land, coast: FeatureCollection<Polygon>, towns: readonly Town[], cells: readonly Cell[], names: Iterator<string, never>, seed: number): FeatureCollection<Polygon | MultiPolygon, ZoneFeature['properties']> {
+  const low = cells.filter(({ x, y }) => terrain.heightM(x, y, land.inlandKm(x, y)) < 18);
   const seeds = seedsOf(towns, low, names);
   const shapes = shareOut(lowLand(terrain, land, coast), seeds, seed);
   return {

@@ -1,0 +1,60 @@
+import { randomUUID } from 'node:crypto';
+import { acceptAdvisory } from '../feeds';
+import type { Accepted } from '../feeds';
+import type { Services } from '../services';
+import type { EventRecord } from '../store';
+import type { Scenario } from './scenario';
+
+type Needed = Pick<Services, 'store' | 'bus' | 'runs' | 'clock' | 'inspectLayer'>;
+
+const ADVISORIES_AT_START = 3;
+/** After each issue the exercise stands where a room would be at work on it. */
+const CLOCK_AFTER_ISSUE_MS = 2 * 3_600_000;
+const ISSUER = 'demo';
+
+/** The exercise that ships with the program: loads it, and issues its advisories one by one through the common way in. */
+export function demoExercise(services: Needed, scenario: Scenario) {
+  const { store, bus, clock } = services;
+
+  /** Every demo advisory has its own idempotency key, so what is stored says what is still to come. */
+  const keyOf = (index: number): string => `demo advisory ${index + 1}`;
+
+  async function issued(event: EventRecord): Promise<number> {
+    let count = 0;
+    while (count < scenario.advisories.length && (await store.advisories.ofKey(event.id, keyOf(count)))) count++;
+    return count;
+  }
+
+  async function issue(event: EventRecord, index: number, by: string): Promise<Accepted> {
+    const { fileName, bytes } = scenario.advisories[index];
+    const accepted = await acceptAdvisory(services, { event, source: { bytes, contentType: 'text/plain', fileName }, by, idempotencyKey: keyOf(index) });
+    if (!accepted.ok) throw new Error(`Demo advisory ${fileName} cannot be read: ${accepted.errors[0]?.message}`);
+    const startsAt = new Date(Date.parse(accepted.advisory.issuedAt) + CLOCK_AFTER_ISSUE_MS).toISOString();
+    await store.events.setClock(event.id, { startsAt, anchoredAt: new Date(clock.nowMs()).toISOString(), rate: event.clock?.rate ?? 1 });
+    bus.emit('event', { eventId: event.id });
+    return accepted;
+  }
+
+  return {
+    /** Advisories not issued yet. */
+    async left(event: EventRecord): Promise<number> {
+      return scenario.advisories.length - (await issued(event));
+    },
+    /** Issues the next advisory; null when all are in. */
+    async next(event: EventRecord, by: string): Promise<Accepted | null> {
+      const index = await issued(event);
+      return index < scenario.advisories.length ? issue(event, index, by) : null;
+    },
+    /** A new demo event with its layers and its first advisories. */
+    async load(): Promise<void> {
+      const at = new Date(clock.nowMs()).toISOString();
+      const event = await store.events.add({ id: randomUUID(), name: scenario.eventName, timeZone: scenario.timeZone, exercise: true, demo: true, clock: null, createdAt: at });
+      for (const { kind, name, bytes, contentType, fileName } of scenario.layers) {
+        const inspection = await services.inspectLayer({ kind, assetClass: name, bytes });
+        if (!inspection.ok) throw new Error(`Demo layer ${fileName} cannot be read: ${inspection.errors[0]?.message}`);
+        await store.layers.add({ eventId: event.id, kind, name, rows: inspection.rows, classes: inspection.classes, source: { bytes, contentType, fileName }, receivedAt: at, receivedBy: ISSUER });
+      }
+      for (let index = 0; index < ADVISORIES_AT_START; index++) await issue(event, index, ISSUER);
+    },
+  };
+}
