@@ -3,6 +3,7 @@ import { getCoreRowModel, useReactTable } from '@tanstack/react-table';
 import { useVirtualizer } from '@tanstack/react-virtual';
 import { useMemo, useState } from 'react';
 import type { Impact } from '../../lib/impact';
+import { EXPORTS, exportUrl } from '../http/api';
 import { useFormats, useHold, useView } from '../live/EventContext';
 import { words } from '../words';
 import { useRowHeight } from './useRowHeight';
@@ -55,7 +56,12 @@ export function ZoneTable({ zones, impact }: { zones: ZoneView[]; impact: Impact
         <p className={styles.foot}>
           {words.zones.foot(impact.evacuation.zonesReached['34'], zones.length)}{' '}
           {impact.evacuation.zonesWithoutClearance > 0 && `${words.zones.footUnknown(impact.evacuation.zonesWithoutClearance)} `}
-          {words.zones.footSlack}
+          {words.zones.footSlack} {words.zones.files}:{' '}
+          {EXPORTS.map((name) => (
+            <a key={name} href={exportUrl(impact.eventId, name, impact.revision)} download>
+              {name}
+            </a>
+          ))}
         </p>
       )}
     </section>

@@ -43,4 +43,8 @@ export const fetchLayers = async (eventId: string, signal?: AbortSignal): Promis
 export const fetchLayerSource = (eventId: string, layerId: string, signal?: AbortSignal): Promise<FeatureCollection> =>
   getJson(`${event(eventId)}/layers/${encodeURIComponent(layerId)}/source`, signal);
 export const fetchLog = async (eventId: string, signal?: AbortSignal): Promise<LogEntry[]> => (await getJson<Listed<LogEntry>>(`${event(eventId)}/log${query({ limit: 500 })}`, signal)).items;
+/** Files to take away, made for one revision. */
+export const EXPORTS = ['zones.csv', 'assets.csv', 'swath.geojson'] as const;
+export const exportUrl = (eventId: string, name: (typeof EXPORTS)[number], revision: number): string => `/api/v1${event(eventId)}/exports/${name}${query({ revision })}`;
+
 export const advisorySourceUrl = (eventId: string, advisoryId: string): string => `/api/v1${event(eventId)}/advisories/${encodeURIComponent(advisoryId)}/source`;

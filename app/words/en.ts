@@ -87,7 +87,7 @@ export const en = {
     foot: (reached: number, of: number) => `${reached} of ${of} zones reached by 34 kt on the track.`,
     footUnknown: (count: number) => `${count} without a clearance time.`,
     footSlack: 'Slack = start-by time less now; clearance hours are the layer’s own.',
-    sortBy: (column: string) => `Sort by ${column}`,
+    files: 'Take away',
   },
   deadlines: { title: 'Next deadlines', none: 'No deadline on this forecast.', line: (slack: string, clock: string) => `${slack}, start by ${clock}` },
   strip: {
