@@ -80,7 +80,7 @@ export function LiveMap() {
       )}
       <HoverCard map={map} />
       <MapButtons onZoom={(by) => keys[by > 0 ? '+' : '-']()} onFit={fit} />
-      <Legend />
+      <Legend map={map} />
     </>
   );
 }

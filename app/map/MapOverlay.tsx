@@ -16,6 +16,7 @@ import { useTrack } from './useTrack';
 export function MapOverlay({ map }: { map: StoreApi<MapState> }) {
   const camera = useStore(map, (state) => state.camera);
   const size = useStore(map, (state) => state.size);
+  const legend = useStore(map, (state) => state.legend);
   const distance = useStore(prefsStore, (state) => state.distance);
   const track = useTrack();
   const places = usePlaces();
@@ -23,9 +24,9 @@ export function MapOverlay({ map }: { map: StoreApi<MapState> }) {
   return (
     <svg className={styles.overlay} width={size.width} height={size.height} aria-hidden="true">
       <LitZones camera={camera} size={size} />
-      <GraticuleLabels camera={camera} size={size} />
+      <GraticuleLabels camera={camera} size={size} below={legend.height} />
       {track && <TrackLine track={track} camera={camera} size={size} />}
-      <PlaceLabels track={track} places={places} camera={camera} size={size} />
+      <PlaceLabels track={track} places={places} camera={camera} size={size} legend={legend} />
       <ScaleBar camera={camera} size={size} unit={distance} />
     </svg>
   );

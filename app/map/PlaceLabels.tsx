@@ -9,8 +9,8 @@ import type { Camera, Size } from './mercator';
 import type { TrackView } from './trackView';
 import type { Place } from './usePlaces';
 
-/** Times along the track and names of towns, none over another. */
-export function PlaceLabels({ track, places, camera, size }: { track: TrackView | null; places: readonly Place[]; camera: Camera; size: Size }) {
+/** Times along the track and names of towns, none over another nor under legend, buttons or scale. */
+export function PlaceLabels({ track, places, camera, size, legend }: { track: TrackView | null; places: readonly Place[]; camera: Camera; size: Size; legend: Size }) {
   const formats = useFormats();
   const label = (id: string, text: string, lon: number, lat: number, priority: number, gap: number, height = 13): Label => {
     const [x, y] = project(camera, size, nearestTurn(lon, camera.lon), lat);
@@ -20,7 +20,12 @@ export function PlaceLabels({ track, places, camera, size }: { track: TrackView 
   const now = track?.now ? [label('now', words.map.now, track.now[0], track.now[1], 2e9, 15)] : [];
   const towns = places.map((place) => label(`town-${place.name}`, place.name, place.lon, place.lat, place.people, 9));
   const dots = [...times, ...now].map(({ x, y }) => ({ left: x - 6, right: x + 6, top: y - 6, bottom: y + 6 }));
-  const placed = placeLabels([...times, ...now, ...towns], size, dots);
+  const furniture = [
+    { left: 0, right: legend.width, top: size.height - legend.height, bottom: size.height },
+    { left: size.width - 150, right: size.width, top: 0, bottom: 44 },
+    { left: size.width - 260, right: size.width, top: size.height - 48, bottom: size.height },
+  ];
+  const placed = placeLabels([...times, ...now, ...towns], size, [...dots, ...furniture]);
   const shown = new Set(placed.map((one) => one.id));
   return (
     <g className={styles.labels}>

@@ -48,6 +48,6 @@ export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom:
       stroked: false,
     }),
     new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.halo, 0.85) }),
-    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-${key}`, getIcon: (mark) => mark.glyph, getColor: (mark) => (mark.colour[3] < 255 ? palette.halo : mark.colour) }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-${key}`, getIcon: (mark) => mark.glyph, getColor: (mark) => mark.colour }),
   ];
 }

@@ -9,8 +9,10 @@ export interface MapState {
   moved: boolean;
   /** Where the pointer is, for the hover card. */
   pointer: { x: number; y: number } | null;
+  /** Room the legend takes at the bottom left. */
+  legend: Size;
   drawing: 'starting' | 'ready' | 'impossible';
 }
 
 export const createMapState = (): StoreApi<MapState> =>
-  createStore<MapState>(() => ({ camera: { lon: 0, lat: 20, zoom: 2 }, size: { width: 0, height: 0 }, moved: false, pointer: null, drawing: 'starting' }));
+  createStore<MapState>(() => ({ camera: { lon: 0, lat: 20, zoom: 2 }, size: { width: 0, height: 0 }, moved: false, pointer: null, legend: { width: 0, height: 0 }, drawing: 'starting' }));

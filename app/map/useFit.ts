@@ -6,7 +6,7 @@ import { boundsOf, fitted, nearestTurn } from './mercator';
 import type { Bounds } from './mercator';
 
 /** The view leans towards the storm by at most this share of what is worked on, so that the zones stay large. */
-const LEAN = 0.45;
+const LEAN = 0.22;
 const PADDING = { top: 26, right: 40, bottom: 40, left: 40 };
 
 /** Shows the zones (else the assets, else the track), leaning towards the storm; a preview shows all its points. */

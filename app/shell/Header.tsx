@@ -1,5 +1,6 @@
 'use client';
 import Link from 'next/link';
+import { useEffect } from 'react';
 import { useEventMs, useFormats, useLive } from '../live/EventContext';
 import { words } from '../words';
 import { DemoNext } from './DemoNext';
@@ -15,12 +16,16 @@ export function Header({ eventId, tab }: { eventId: string; tab: Tab }) {
   const shown = useLive((state) => (state.impact && state.advisories[state.impact.advisoryId]) ?? state.advisory);
   const formats = useFormats();
   const nowMs = useEventMs();
+  const name = shown?.storm.name ?? event?.name;
+  useEffect(() => {
+    document.title = name ? words.pageTitle(name, words.tabs[tab]) : words.product;
+  }, [name, tab]);
   return (
     <header className={styles.header}>
       <div className={styles.storm}>
         <h1 title={event?.name}>
-          <Link href="/?list" className={styles.home} aria-label={`${shown?.storm.name ?? event?.name ?? ''}, ${words.common.home}`}>
-            {shown?.storm.name ?? event?.name ?? '\u00a0'}
+          <Link href="/?list" className={styles.home} aria-label={`${name ?? ''}, ${words.common.home}`}>
+            {name ?? '\u00a0'}
           </Link>
         </h1>
         {event?.exercise && <span className={styles.exercise}>{words.exercise}</span>}

@@ -1,6 +1,7 @@
 /** Every word the screens show, in English. A second language is a second file of this shape. */
 export const en = {
   product: 'Leeboard',
+  pageTitle: (storm: string, page: string) => `${storm}, ${page}, Leeboard`,
   tabs: { board: 'Board', forecasts: 'Forecasts', layers: 'Layers', log: 'Log', settings: 'Settings' },
   tabsLabel: 'Pages of this event',
   exercise: 'exercise',
