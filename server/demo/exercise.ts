@@ -35,6 +35,17 @@ export function demoExercise(services: Needed, scenario: Scenario) {
     return accepted;
   }
 
+  function computed(advisoryId: string): Promise<void> {
+    return new Promise((resolve) => {
+      const done = (notice: { advisoryId: string }): void => {
+        if (notice.advisoryId !== advisoryId) return;
+        for (const stop of stops) stop();
+        resolve();
+      };
+      const stops = [bus.on('impact', done), bus.on('failed', done)];
+    });
+  }
+
   return {
     /** Advisories not issued yet. */
     async left(event: EventRecord): Promise<number> {
@@ -54,7 +65,11 @@ export function demoExercise(services: Needed, scenario: Scenario) {
         if (!inspection.ok) throw new Error(`Demo layer ${fileName} cannot be read: ${inspection.errors[0]?.message}`);
         await store.layers.add({ eventId: event.id, kind, name, rows: inspection.rows, classes: inspection.classes, source: { bytes, contentType, fileName }, receivedAt: at, receivedBy: ISSUER });
       }
-      for (let index = 0; index < ADVISORIES_AT_START; index++) await issue(event, index, ISSUER);
+      for (let index = 0; index < ADVISORIES_AT_START; index++) {
+        const accepted = await issue(event, index, ISSUER);
+        // Each is computed before the next comes, so that the first board can say what changed.
+        if (accepted.ok && index + 1 < ADVISORIES_AT_START) await computed(accepted.advisory.id);
+      }
     },
   };
 }

@@ -1,6 +1,6 @@
 import { createRequire } from 'node:module';
 import { readFileSync } from 'node:fs';
-import { area, booleanPointInPolygon, bbox } from '@turf/turf';
+import { area, bbox, booleanClockwise, booleanPointInPolygon, booleanValid, kinks } from '@turf/turf';
 import type { FeatureCollection, MultiPolygon, Polygon, Position } from 'geojson';
 import { feature } from 'topojson-client';
 import type { Topology } from 'topojson-specification';
@@ -47,6 +47,17 @@ describe('the country', () => {
     const lengthKm = distanceKm(25.2, west, 25.2, east);
     expect(lengthKm).toBeGreaterThan(280);
     expect(lengthKm).toBeLessThan(345);
+  });
+
+  test('has islands that are valid polygons, and do not cross themselves', () => {
+    for (const island of coast.features) {
+      expect(booleanValid(island)).toBe(true);
+      expect(kinks(island).features).toEqual([]);
+    }
+  }, 60_000);
+
+  test('turns its outer rings counter-clockwise and its lakes clockwise (RFC 7946, section 3.1.6)', () => {
+    for (const { geometry } of coast.features) geometry.coordinates.forEach((ring, i) => expect(booleanClockwise(ring)).toBe(i > 0));
   });
 
   test('has smaller islands, and a long thin barrier coast to the south', () => {

@@ -1,4 +1,4 @@
-import { area, bbox, booleanPointInPolygon, booleanValid, featureCollection, intersect, kinks, polygon } from '@turf/turf';
+import { area, bbox, booleanClockwise, booleanPointInPolygon, booleanValid, featureCollection, intersect, kinks, polygon } from '@turf/turf';
 import { describe, expect, test } from 'vitest';
 import { cellsOf, coast, zoneFeatures } from './shipped';
 
@@ -14,6 +14,7 @@ describe('zones', () => {
       expect(booleanValid(piece)).toBe(true);
       expect(kinks(piece).features).toEqual([]);
       expect(area(piece)).toBeGreaterThan(1e5);
+      rings.forEach((ring, i) => expect(booleanClockwise(ring)).toBe(i > 0));
     }
   });
 

@@ -5,7 +5,7 @@ import type { Grid } from './frame';
 import { makeLand } from './land';
 import type { Land } from './land';
 import { mix } from './noise';
-import { ringAreaKm2, thinned } from './rings';
+import { ringAreaKm2, thinned, withoutTouches } from './rings';
 import type { Terrain } from './terrain';
 
 const STEP_KM = 0.4;
@@ -15,7 +15,7 @@ const LEAST_LAKE_KM2 = 3;
 /** Corners closer than this to the line without them are left out. */
 const TOLERANCE_KM = 0.07;
 
-/** The country's coast, largest island first; lakes are holes. */
+/** The country’s coast, largest island first; lakes are holes. Outer rings turn counter-clockwise (RFC 7946); contours come the other way. */
 export function makeCoast(terrain: Terrain): FeatureCollection<Polygon> {
   const offshoreKm = offshoreOf(terrain);
   const grid = gridOf(STEP_KM);
@@ -28,7 +28,7 @@ export function makeCoast(terrain: Terrain): FeatureCollection<Polygon> {
     .map(([outer, ...lakes]) => [outer, ...lakes.filter((lake) => Math.abs(ringAreaKm2(lake)) >= LEAST_LAKE_KM2)])
     .filter(([outer]) => Math.abs(ringAreaKm2(outer)) >= LEAST_ISLAND_KM2)
     .sort(([a], [b]) => Math.abs(ringAreaKm2(b)) - Math.abs(ringAreaKm2(a)));
-  return { type: 'FeatureCollection', features: polygons.map((rings): Feature<Polygon> => ({ type: 'Feature', properties: {}, geometry: { type: 'Polygon', coordinates: rings.map(inDegrees) } })) };
+  return { type: 'FeatureCollection', features: polygons.map((rings): Feature<Polygon> => ({ type: 'Feature', properties: {}, geometry: { type: 'Polygon', coordinates: rings.map((ring) => withoutTouches(inDegrees(ring)).reverse()) } })) };
 }
 
 /** Polygons where a field is above a level, in km; outer ring first. */

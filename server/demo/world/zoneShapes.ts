@@ -5,7 +5,7 @@ import { gridOf, round4, sampleGrid } from './frame';
 import type { Km } from './frame';
 import type { Land } from './land';
 import { makeNoise } from './noise';
-import { ringAreaKm2, thinned } from './rings';
+import { ringAreaKm2, thinned, untangled } from './rings';
 import type { Terrain } from './terrain';
 
 /** Ground that lies lower is in a zone. */
@@ -43,9 +43,9 @@ export function shareOut(low: readonly Feature<Polygon | MultiPolygon>[], seeds:
 const piecesOf = (shape: Feature<Polygon | MultiPolygon> | null): Position[][][] =>
   shape === null ? [] : shape.geometry.type === 'Polygon' ? [shape.geometry.coordinates] : shape.geometry.coordinates;
 
-/** Four decimals, and no corner twice in a row. */
+/** Four decimals, no corner twice in a row, and no loops that rounding has made. */
 const tidy = (ring: Position[]): Position[] =>
-  ring.map(([lon, lat]) => [round4(lon), round4(lat)]).filter(([lon, lat], i, all) => i === 0 || lon !== all[i - 1][0] || lat !== all[i - 1][1]);
+  untangled(ring.map(([lon, lat]) => [round4(lon), round4(lat)]).filter(([lon, lat], i, all) => i === 0 || lon !== all[i - 1][0] || lat !== all[i - 1][1]));
 
 const overlap = (a: readonly number[], b: readonly number[]): boolean => a[0] <= b[2] && b[0] <= a[2] && a[1] <= b[3] && b[1] <= a[3];
 
