@@ -20,7 +20,7 @@ const settingsSchema = z.object({
   DEMO: onOff.default('on'),
   /** Members of a run. */
   MEMBERS: z.coerce.number().int().min(10, 'at least 10 members').max(5000, 'at most 5000 members').default(1000),
-  LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
+  LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('warn'),
 });
 
 export type Settings = Readonly<z.infer<typeof settingsSchema>>;

@@ -26,7 +26,8 @@ function workerFile(): string {
 }
 
 export function openPool(threads = Math.max(1, availableParallelism())): Pool {
-  const piscina = new Piscina({ filename: workerFile(), minThreads: threads, maxThreads: threads, idleTimeout: Infinity });
+  // Loaders given to this process are not for the threads: bundled ones need none, the boot file brings its own.
+  const piscina = new Piscina({ filename: workerFile(), execArgv: [], minThreads: threads, maxThreads: threads, idleTimeout: Infinity });
   const task =
     <T, R>(name: string) =>
     (input: T): Promise<R> =>

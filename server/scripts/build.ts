@@ -1,0 +1,3 @@
+import { buildAll } from './buildAll';
+
+await buildAll();
