@@ -1,7 +1,6 @@
 import type { FastifyBaseLogger, FastifyInstance, RawReplyDefaultExpression, RawRequestDefaultExpression, RawServerDefault } from 'fastify';
 import type { ZodTypeProvider } from 'fastify-type-provider-zod';
 import type { LeeboardAuth } from '../auth';
-import type { Pool } from '../compute/pool';
 import type { Accepted } from '../feeds';
 import type { Services } from '../services';
 import type { EventRecord } from '../store';
@@ -9,13 +8,11 @@ import type { EventRecord } from '../store';
 /** The exercise that ships with the program. */
 export interface Demo {
   /** Issues the next advisory through `acceptAdvisory`; null when none is left. */
-  next(event: EventRecord, by: string, idempotencyKey: string | null): Promise<Accepted | null>;
+  next(event: EventRecord, by: string): Promise<Accepted | null>;
 }
 
 /** What the routes need besides the services of the process. */
 export interface HttpServices extends Services<LeeboardAuth> {
-  /** Reads a layer on a compute thread, to say whether it may be stored. */
-  inspectLayer: Pool['inspectLayer'];
   demo?: Demo;
   /** Of the program, for `/health` and the API's description. */
   version: string;

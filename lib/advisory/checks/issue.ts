@@ -12,6 +12,11 @@ export function issueChecks(advisory: Advisory, { nowMs, previous }: CheckContex
   if (nowMs !== undefined && issuedMs > nowMs) warnings.push({ code: 'issued-in-future', path: 'issuedAt', message: `issued at ${advisory.issuedAt}, which is still to come by the event's clock` });
   if (advisory.nextDueAt !== undefined && Date.parse(advisory.nextDueAt) <= issuedMs) warnings.push({ code: 'next-due-past', path: 'nextDueAt', message: `the next advisory is due at ${advisory.nextDueAt}, not after this one was issued` });
 
+  const { storm, number, centre } = advisory;
+  for (const [path, text] of Object.entries({ 'storm.name': storm.name, number, centre })) {
+    if (/[<>]/.test(text)) warnings.push({ code: 'markup-in-name', path, message: `"${text}" holds marks of a web page (< or >): it is kept and shown as it is; was it copied from a page?` });
+  }
+
   const leadHours = (Date.parse(advisory.points[0]!.validAt) - issuedMs) / HOUR_MS;
   if (leadHours > 0) warnings.push({ code: 'no-position-at-issue', path: 'points[0]', message: `the first position is ${round1(leadHours)} h after issue: none is given at or before it` });
   if (leadHours < -OLDEST_POSITION_HOURS) warnings.push({ code: 'old-position', path: 'points[0]', message: `the first position is ${round1(-leadHours)} h older than the issue time` });
