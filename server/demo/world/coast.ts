@@ -40,9 +40,11 @@ export function contourKm({ west, south, stepKm, columns, rows }: Grid, field: F
 
 export const inDegrees = (ring: Position[]): Position[] => ring.map(([x, y]) => [round4(lonOf(x)), round4(latOf(y))]);
 
-/** The land of a coast in degrees, as it ships. */
-export const landOf = (coast: FeatureCollection<Polygon>): Land =>
-  makeLand(coast.features.map(({ geometry }) => geometry.coordinates.map((ring) => ring.map(([lon, lat]) => [kmOf(lat, lon).x, kmOf(lat, lon).y]))));
+/** The land of a coast in degrees, as it ships; islets smaller than `leastKm2` are left out. */
+export function landOf(coast: FeatureCollection<Polygon>, leastKm2 = 0): Land {
+  const islands = coast.features.map(({ geometry }) => geometry.coordinates.map((ring) => ring.map(([lon, lat]) => [kmOf(lat, lon).x, kmOf(lat, lon).y])));
+  return makeLand(islands.filter(([outer]) => ringAreaKm2(outer) >= leastKm2));
+}
 
 /** How far (km) a place is from the body of the main island: from samples a km apart, since the barrier coast asks everywhere. */
 function offshoreOf(terrain: Terrain): (x: number, y: number) => number {

@@ -33,14 +33,18 @@ export interface World {
   properties: Property[];
 }
 
+/** Nobody lives on marsh islets and skerries. */
+const LEAST_LIVED_KM2 = 15;
+
 /** The country of a seed. Each part has a stream of chance of its own, so that a change in one leaves the others as they were. */
 export function makeWorld(seed: number): World {
   const terrain = makeTerrain(seed);
   const coast = makeCoast(terrain);
   const land = landOf(coast);
+  const lived = landOf(coast, LEAST_LIVED_KM2);
   const towns = townsOf(land);
   const roads = makeRoads(terrain, land, towns);
-  const cells = makePopulation(terrain, land, towns, roads, seed + 1);
+  const cells = makePopulation(terrain, lived, towns, roads, seed + 1);
   const names = inventedNames();
   const zones = makeZones(terrain, land, coast, towns, cells, names, seed + 2);
   const partOf = (step: number) => ({ towns, cells, roads, land, random: makeRandom(seed + step) });

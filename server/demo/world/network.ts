@@ -86,11 +86,20 @@ function feederOf(spot: Km, { cells, share }: Sector, land: Land, random: Random
   const outward = [...cells].sort((a, b) => away(spot, a) - away(spot, b));
   const stops = Math.min(7, Math.max(2, outward.length));
   const line: Km[] = [spot];
-  for (let stop = 0; stop < stops; stop++) line.push(near(outward[Math.floor(((stop + 0.7) * outward.length) / stops)], land, random));
+  for (let stop = 0; stop < stops; stop++) {
+    const from = Math.floor((stop * outward.length) / stops);
+    line.push(near(middleOf(outward.slice(from, Math.max(from + 1, Math.floor(((stop + 1) * outward.length) / stops)))), land, random));
+  }
   const lengthKm = line.slice(1).reduce((sum, to, i) => sum + away(line[i], to), 0);
   const people = Math.max(1, Math.round(customersOf(cells) * share));
   const coordinates = line.map(({ x, y }) => placeOf(x, y)).map(({ lat, lon }) => [lon, lat]);
   return { people, poles: Math.max(8, Math.round(lengthKm * POLES_PER_KM + people * SERVICE_POLES)), geometry: { type: 'LineString', coordinates } };
+}
+
+/** The cell nearest to the middle of some: a line through these runs down its wedge instead of from side to side. */
+function middleOf(cells: readonly Cell[]): Cell {
+  const middle = { x: cells.reduce((sum, { x }) => sum + x, 0) / cells.length, y: cells.reduce((sum, { y }) => sum + y, 0) / cells.length };
+  return cells[nearestIndex(cells, middle)];
 }
 
 const away = (a: Km, b: Km): number => Math.hypot(a.x - b.x, a.y - b.y);
