@@ -1,4 +1,3 @@
 /** The demo exercise: an invented country, an invented storm, and the files they ship as. */
 export { readScenario } from './scenario';
-export type { Scenario, ScenarioLayer } from './scenario';
 export { demoExercise } from './exercise';
