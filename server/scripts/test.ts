@@ -40,7 +40,7 @@ const outcomes = [
 try {
   const chromium = ensureChromium();
   outcomes.push(
-    await suite('browser', BROWSER_REPORT, bin('playwright'), ['test'], { LEEBOARD_CHROMIUM: chromium, PLAYWRIGHT_JSON_OUTPUT_NAME: BROWSER_REPORT }, (report: { stats: { expected: number; unexpected: number; flaky: number; skipped: number } }) => ({
+    await suite('browser', BROWSER_REPORT, bin('playwright'), ['test'], { LEEBOARD_CHROMIUM: chromium }, (report: { stats: { expected: number; unexpected: number; flaky: number; skipped: number } }) => ({
       passed: report.stats.expected,
       failed: report.stats.unexpected + report.stats.flaky + report.stats.skipped,
     })),
