@@ -1,15 +1,19 @@
+import type { Position } from 'geojson';
+import { assetPlaces } from './assetPlaces';
 import type { Exposure } from './exposure';
 import { hilbertDistance } from './hilbert';
+import { insideArea } from './insideArea';
+import { milli } from './milli';
 import { SURFACES } from './model';
 import type { Asset, LayerData, Surface, Zone } from './model';
-import { assetPlaces, insideArea } from './samplePlaces';
 import { zoneIndex } from './zoneIndex';
 
 /** Who owns a run of places: an asset, or nobody but the people who live there. */
 interface Owner {
   asset: number;
-  lat: number[];
-  lon: number[];
+  places: Position[];
+  /** Which place stands for it. */
+  middle: number;
   people: number;
   zone: number;
   surface: Surface | null;
@@ -18,46 +22,43 @@ interface Owner {
 /**
  * Puts an event's layers into typed arrays. People are counted from the population cells; a zone's own figure counts only where
  * no cell lies in it, spread over places inside it. Where zones overlap the first holds the people, so that nobody is counted
- * twice: the total is always the sum of the zones and of those outside.
+ * twice: the total is always the sum of the zones and of those outside. People are summed in whole thousandths, so that totals
+ * do not depend on the order of rows.
  */
 export function compileExposure(layers: readonly { layerId: string; data: LayerData }[], surfaceAt: (lat: number, lon: number) => Surface): Exposure {
   const zones = layers.flatMap(({ layerId, data }) => (data.kind === 'zones' ? data.zones.map((zone) => ({ layer: layerId, zone })) : []));
   const assets = layers.flatMap(({ layerId, data }) => (data.kind === 'assets' ? data.assets.map((asset) => ({ layer: layerId, asset })) : []));
-  const zoneOf = zoneIndex(zones.map(({ zone }) => zone));
-  const classes = [...new Set(assets.map(({ asset }) => asset.class))];
+  const classIndex = new Map<string, number>();
+  for (const { asset } of assets) if (!classIndex.has(asset.class)) classIndex.set(asset.class, classIndex.size);
 
-  const people = peopleOwners(layers, zones.map(({ zone }) => zone), zoneOf);
+  const people = peopleOwners(layers, zones.map(({ zone }) => zone));
   const owners = alongCurve([...people, ...assets.map(({ asset }, i) => assetOwner(asset, i))]);
-  const places = placesOf(owners, surfaceAt);
-  const { firstPlace, placeCount, lat, lon } = assetPlaceRuns(owners, assets.length);
-  const zonePeople = new Float64Array(zones.length);
-  let peopleTotal = 0;
+  const zoneMilli = new Float64Array(zones.length);
+  let totalMilli = 0;
   for (const owner of people) {
-    peopleTotal += owner.people;
-    if (owner.zone >= 0) zonePeople[owner.zone] += owner.people;
+    totalMilli += milli(owner.people);
+    if (owner.zone >= 0) zoneMilli[owner.zone] += milli(owner.people);
   }
   return {
-    places,
+    places: placesOf(owners, surfaceAt),
     assets: {
       count: assets.length,
       layer: assets.map(({ layer }) => layer),
       id: assets.map(({ asset }) => asset.id),
       name: assets.map(({ asset }) => asset.name),
-      classIndex: Uint16Array.from(assets, ({ asset }) => classes.indexOf(asset.class)),
+      classIndex: Uint16Array.from(assets, ({ asset }) => classIndex.get(asset.class)!),
       people: assets.map(({ asset }) => asset.people),
-      lat,
-      lon,
-      firstPlace,
-      placeCount,
+      ...assetRuns(owners, assets.length),
     },
-    classes,
-    zones: zones.map(({ layer, zone }, z) => ({ layer, id: zone.id, name: zone.name, clearanceHours: zone.clearanceHours, people: zonePeople[z] })),
-    peopleTotal,
-    peopleInZones: zonePeople.reduce((sum, count) => sum + count, 0),
+    classes: [...classIndex.keys()],
+    zones: zones.map(({ layer, zone }, z) => ({ layer, id: zone.id, name: zone.name, clearanceHours: zone.clearanceHours, people: zoneMilli[z] / 1000 })),
+    peopleTotal: totalMilli / 1000,
+    peopleInZones: zoneMilli.reduce((sum, count) => sum + count, 0) / 1000,
   };
 }
 
-function peopleOwners(layers: readonly { data: LayerData }[], zones: readonly Zone[], zoneOf: (lat: number, lon: number) => number): Owner[] {
+function peopleOwners(layers: readonly { data: LayerData }[], zones: readonly Zone[]): Owner[] {
+  const zoneOf = zoneIndex(zones);
   const owners: Owner[] = [];
   const counted = new Set<number>();
   for (const { data } of layers) {
@@ -66,38 +67,40 @@ function peopleOwners(layers: readonly { data: LayerData }[], zones: readonly Zo
     for (let i = 0; i < count; i++) {
       const zone = zoneOf(lat[i], lon[i]);
       counted.add(zone);
-      owners.push({ asset: -1, lat: [lat[i]], lon: [lon[i]], people: people[i], zone, surface: null });
+      owners.push(peopleAt([lon[i], lat[i]], people[i], zone));
     }
   }
   zones.forEach((zone, z) => {
     if (counted.has(z)) return;
     const inside = insideArea(zone.geometry);
-    for (const [lon, lat] of inside) owners.push({ asset: -1, lat: [lat], lon: [lon], people: (zone.people ?? 0) / inside.length, zone: z, surface: null });
+    // Whole thousandths, shared so that they add up to the figure itself.
+    const upTo = (k: number): number => Math.round((milli(zone.people ?? 0) * k) / inside.length);
+    inside.forEach((place, k) => owners.push(peopleAt(place, (upTo(k + 1) - upTo(k)) / 1000, z)));
   });
   return owners;
 }
 
-function assetOwner(asset: Asset, index: number): Owner {
-  const places = assetPlaces(asset.geometry);
-  return { asset: index, lat: places.map(([, lat]) => lat), lon: places.map(([lon]) => lon), people: 0, zone: -1, surface: asset.surface };
-}
+const peopleAt = (place: Position, people: number, zone: number): Owner => ({ asset: -1, places: [place], middle: 0, people, zone, surface: null });
 
-/** Owners in the order in which a Hilbert curve over their bounds passes their first places. */
-function alongCurve(owners: Owner[]): Owner[] {
+const assetOwner = (asset: Asset, index: number): Owner => ({ asset: index, ...assetPlaces(asset.geometry), people: 0, zone: -1, surface: asset.surface });
+
+/** Owners in the order in which a Hilbert curve over their bounds passes the places that stand for them. */
+function alongCurve(owners: readonly Owner[]): Owner[] {
   let [west, south, east, north] = [Infinity, Infinity, -Infinity, -Infinity];
-  for (const { lat, lon } of owners) {
-    west = Math.min(west, lon[0]);
-    east = Math.max(east, lon[0]);
-    south = Math.min(south, lat[0]);
-    north = Math.max(north, lat[0]);
+  for (const { places, middle } of owners) {
+    const [lon, lat] = places[middle];
+    west = Math.min(west, lon);
+    east = Math.max(east, lon);
+    south = Math.min(south, lat);
+    north = Math.max(north, lat);
   }
   const side = Math.max(east - west, north - south) || 1;
-  const at = owners.map(({ lat, lon }) => hilbertDistance((lon[0] - west) / side, (lat[0] - south) / side));
+  const at = Float64Array.from(owners, ({ places, middle }) => hilbertDistance((places[middle][0] - west) / side, (places[middle][1] - south) / side));
   return owners.map((_, i) => i).sort((a, b) => at[a] - at[b] || a - b).map((i) => owners[i]);
 }
 
 function placesOf(owners: readonly Owner[], surfaceAt: (lat: number, lon: number) => Surface): Exposure['places'] {
-  const count = owners.reduce((sum, { lat }) => sum + lat.length, 0);
+  const count = owners.reduce((sum, owner) => sum + owner.places.length, 0);
   const places = {
     count,
     lat: new Float64Array(count),
@@ -109,30 +112,29 @@ function placesOf(owners: readonly Owner[], surfaceAt: (lat: number, lon: number
   };
   let i = 0;
   for (const owner of owners) {
-    for (let k = 0; k < owner.lat.length; k++, i++) {
-      places.lat[i] = owner.lat[k];
-      places.lon[i] = owner.lon[k];
-      places.surface[i] = SURFACES.indexOf(owner.surface ?? surfaceAt(owner.lat[k], owner.lon[k]));
+    for (const [lon, lat] of owner.places) {
+      places.lat[i] = lat;
+      places.lon[i] = lon;
+      places.surface[i] = SURFACES.indexOf(owner.surface ?? surfaceAt(lat, lon));
       places.people[i] = owner.people;
       places.zone[i] = owner.zone;
       places.asset[i] = owner.asset;
+      i++;
     }
   }
   return places;
 }
 
-function assetPlaceRuns(owners: readonly Owner[], count: number) {
+function assetRuns(owners: readonly Owner[], count: number): Pick<Exposure['assets'], 'firstPlace' | 'placeCount' | 'lat' | 'lon'> {
   const runs = { firstPlace: new Uint32Array(count), placeCount: new Uint32Array(count), lat: new Float64Array(count), lon: new Float64Array(count) };
   let place = 0;
-  for (const { asset, lat, lon } of owners) {
+  for (const { asset, places, middle } of owners) {
     if (asset >= 0) {
-      const middle = lat.length >> 1;
       runs.firstPlace[asset] = place;
-      runs.placeCount[asset] = lat.length;
-      runs.lat[asset] = lat[middle];
-      runs.lon[asset] = lon[middle];
+      runs.placeCount[asset] = places.length;
+      [runs.lon[asset], runs.lat[asset]] = places[middle];
     }
-    place += lat.length;
+    place += places.length;
   }
   return runs;
 }

@@ -2,24 +2,77 @@ import { CsvError, parse } from 'csv-parse/browser/esm/sync';
 import type { Row } from './fields';
 import type { RowError } from './model';
 
-export type CsvRows = { ok: true; columns: string[]; rows: Row[]; decimalComma: boolean } | { ok: false; errors: RowError[] };
+export type CsvRows = { ok: true; columns: string[]; rows: Row[] } | { ok: false; errors: RowError[] };
 
-/** Rows of a CSV (RFC 4180) with a header; the separator is a comma, a semicolon or a tab, told from the header. */
+interface Line {
+  row: number;
+  cells: string[];
+}
+
+/**
+ * Rows of a CSV (RFC 4180) whose first row names the columns, numbered as a spreadsheet numbers them. The separator is a comma,
+ * a semicolon or a tab, told from the header; empty rows are passed over.
+ */
 export function csvRows(text: string): CsvRows {
-  const header = text.slice(0, (text.indexOf('\n') + 1 || text.length + 1) - 1);
-  const delimiter = [';', '\t', ','].find((mark) => header.includes(mark)) ?? ',';
+  const lines = linesOf(text);
+  if (!Array.isArray(lines)) return { ok: false, errors: [lines] };
+  const [header, ...body] = lines;
+  if (!header) return { ok: false, errors: [{ row: 1, message: 'the file is empty' }] };
+  if (body.length === 0) return { ok: false, errors: [{ row: header.row, message: 'the file has a header but no rows below it' }] };
+  // Spreadsheets leave separators behind where columns were emptied.
+  const width = header.cells.reduce((last, name, i) => (name === '' ? last : i + 1), 0);
+  const columns = header.cells.slice(0, width);
+  const errors: RowError[] = namesFaults(columns).map((message) => ({ row: header.row, message }));
+  const rows = body.map(({ row, cells }): Row => {
+    if (cells.length < width || cells.slice(width).some((cell) => cell !== '')) {
+      errors.push({ row, message: `found ${cells.length} values, the header names ${width} columns: put values that hold the separator in quotes, and leave none out` });
+    }
+    return { row, values: Object.fromEntries(columns.map((name, i) => [name, cells[i] ?? ''])) };
+  });
+  return errors.length > 0 ? { ok: false, errors } : { ok: true, columns, rows };
+}
+
+function linesOf(text: string): Line[] | RowError {
+  const lines: Line[] = [];
   try {
-    const records = parse(text, { bom: true, columns: true, delimiter, skip_empty_lines: true, trim: true, info: false }) as Record<string, string>[];
-    if (records.length === 0) return { ok: false, errors: [{ row: 1, message: 'the file has a header but no rows below it' }] };
-    return {
-      ok: true,
-      columns: Object.keys(records[0]),
-      rows: records.map((values, i) => ({ row: i + 2, values })),
-      decimalComma: delimiter === ';',
-    };
+    parse(text, {
+      bom: true,
+      delimiter: separatorOf(text),
+      relax_column_count: true,
+      skip_empty_lines: true,
+      trim: true,
+      on_record: (cells: string[], { records, empty_lines }) => {
+        if (cells.some((cell) => cell !== '')) lines.push({ row: records + empty_lines, cells });
+        return null;
+      },
+    });
+    return lines;
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
-    const lines = 'lines' in error && typeof error.lines === 'number' ? error.lines : 1;
-    return { ok: false, errors: [{ row: lines, message: `this is not a well-formed CSV: ${error.message}` }] };
+    const { records = 0, empty_lines = 0 } = error as { records?: number; empty_lines?: number };
+    return { row: records + empty_lines + 1, message: `${error.message}. Put a value that holds quotes or line ends in quotes, and double the quotes in it (RFC 4180)` };
   }
+}
+
+/** The mark that splits the header into most columns. */
+function separatorOf(text: string): string {
+  const counts = new Map([[',', 0], [';', 0], ['\t', 0]]);
+  let quoted = false;
+  let named = false;
+  for (const mark of text) {
+    if (mark === '"') quoted = !quoted;
+    else if (quoted) continue;
+    else if (mark !== '\n' && mark !== '\r') named = true;
+    else if (named) break;
+    const count = counts.get(mark);
+    if (count !== undefined) counts.set(mark, count + 1);
+  }
+  return [...counts].reduce((best, next) => (next[1] > best[1] ? next : best))[0];
+}
+
+function namesFaults(columns: readonly string[]): string[] {
+  return columns.flatMap((name, i) => {
+    if (name === '') return `column ${i + 1} has no name in the header`;
+    return columns.indexOf(name) < i ? `two columns are named "${name.slice(0, 40)}": give each its own name` : [];
+  });
 }

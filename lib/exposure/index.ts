@@ -3,5 +3,6 @@ export * from './model';
 export type { ExposedZone, Exposure } from './exposure';
 export { cornersOf } from './corners';
 export { compileExposure } from './compileExposure';
+export { milli } from './milli';
 export { readLayer } from './readLayer';
 export type { LayerOptions } from './readLayer';

@@ -4,4 +4,3 @@ export * from './change';
 export * from './members';
 export * from './model';
 export * from './tabulate';
-export { milli } from './zoneRows';

@@ -1,3 +1,4 @@
+import { milli } from '../exposure';
 import type { Exposure } from '../exposure';
 import type { PlaceHazard } from '../hazard';
 import { byThreshold, THRESHOLDS_KT } from '../units';
@@ -8,7 +9,7 @@ import type { Earlier } from './change';
 import type { MemberSummary } from './members';
 import type { ClassRow, Impact, Spread, Totals, ZoneRow } from './model';
 import { spreadOver, trackOnly } from './spread';
-import { milli, zoneRows } from './zoneRows';
+import { zoneRows } from './zoneRows';
 
 /** What a run knows besides its numbers. */
 export interface RunParticulars {

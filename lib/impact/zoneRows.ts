@@ -1,3 +1,4 @@
+import { milli } from '../exposure';
 import type { Exposure } from '../exposure';
 import { LEAST_CHANCE_FOR_TIMES, QUANTILES, sortedQuantile } from '../hazard';
 import type { PlaceHazard } from '../hazard';
@@ -93,8 +94,5 @@ function countFinite(values: Float32Array, offset: number, count: number): numbe
   for (let i = offset; i < offset + count; i++) if (Number.isFinite(values[i])) finite++;
   return finite;
 }
-
-/** Thousandths of a person: whole numbers add up the same in any order. */
-export const milli = (people: number): number => Math.round(people * 1000);
 
 const round1 = (value: number): number => Math.round(value * 10) / 10;

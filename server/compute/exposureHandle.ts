@@ -1,9 +1,8 @@
 import type { Exposure } from '../../lib/exposure';
 import { placesAt, makeBlocks } from '../../lib/hazard';
 import type { Targets } from '../../lib/hazard';
-import { milli } from '../../lib/impact';
 import { surfaceFactor } from '../../lib/wind';
-import { SURFACES } from '../../lib/exposure';
+import { milli, SURFACES } from '../../lib/exposure';
 import { readJson, shareArrays, sharedBytes, sharedJson } from './shared';
 
 /**
