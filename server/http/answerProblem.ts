@@ -10,6 +10,8 @@ const megabytes = (bytes: number): string => `${Math.round(bytes / 1024 / 1024)}
 export function answerProblem(error: FastifyError | Refusal | Error, request: FastifyRequest, reply: FastifyReply): FastifyReply {
   const refusal = refusalOf(error, request);
   if (refusal.code === 'fault') request.log.error({ err: error, request: request.id, method: request.method, url: request.routeOptions.url }, 'request failed');
+  // Hanging up on a client that is still sending loses it the answer: what it sends is read and dropped instead.
+  if (refusal.code === 'too-large') void reply.removeHeader('connection');
   if (refusal.code === 'unauthorized') void reply.header('www-authenticate', 'Bearer');
   const [status, title] = REFUSALS[refusal.code];
   const problem: Problem = {

@@ -30,8 +30,25 @@ export async function describeApi(app: Api, version: string): Promise<void> {
       const described = { ...schema, security, description: access === 'anyone' ? 'Needs no key.' : `Needs the role ${access}.` };
       return { schema: accepts ? { ...described, body: { content: Object.fromEntries(accepts.map((type) => [type, { schema: bodySchema(type, url) }])) } } : described, url };
     },
-    transformObject,
+    transformObject: (document) => withoutUnused(transformObject(document)),
   });
+}
+
+const REFERENCE = /"#\/components\/schemas\/([^"]+)"/g;
+
+/** Each named part is described twice, as taken and as given; only those that a call leads to are kept. */
+function withoutUnused<T extends { paths?: unknown; components?: { schemas?: Record<string, unknown> | undefined } }>(document: T): T {
+  const schemas = document.components?.schemas ?? {};
+  const reached = new Set<string>();
+  const follow = (part: unknown): void => {
+    for (const [, name] of JSON.stringify(part).matchAll(REFERENCE)) {
+      if (reached.has(name)) continue;
+      reached.add(name);
+      follow(schemas[name]);
+    }
+  };
+  follow(document.paths);
+  return { ...document, components: { ...document.components, schemas: Object.fromEntries(Object.entries(schemas).filter(([name]) => reached.has(name))) } };
 }
 
 /** A body that is kept raw is described, not parsed, by its schema. */

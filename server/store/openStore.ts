@@ -1,8 +1,7 @@
 import { Kysely, Migrator, sql } from 'kysely';
-import type { Settings } from '../settings';
 import { advisoryStore } from './advisoryStore';
 import { openEngine } from './engine';
-import type { Engine } from './engine';
+import type { Engine, EngineSettings } from './engine';
 import { eventStore } from './eventStore';
 import { impactStore } from './impactStore';
 import { layerStore } from './layerStore';
@@ -27,15 +26,13 @@ export interface OpenedStore extends Store {
   shared: SharedDatabase;
 }
 
-/** Opens the database that the settings name, bringing its tables up to date. Throws with one line when it cannot. */
-export async function openStore(settings: Pick<Settings, 'DATABASE_URL' | 'DATA_DIR'>): Promise<OpenedStore> {
-  const engine = openEngine(settings);
-  const db = new Kysely<Tables>({ dialect: engine.dialect });
-  const { error } = await new Migrator({ db, provider: migrations(engine) }).migrateToLatest();
-  if (error) {
-    await db.destroy();
-    throw error instanceof Error ? error : new Error(String(error));
-  }
+const CONNECTIONS = 8;
+
+/** Opens the database that the settings name, bringing its tables up to date. Throws one line when it cannot. */
+export async function openStore(settings: EngineSettings, { connections = CONNECTIONS } = {}): Promise<OpenedStore> {
+  const { engine, db } = await openDatabase(settings, connections).catch((error: unknown) => {
+    throw new Error(cannotOpen(settings, error), { cause: error });
+  });
   const database: Database = { db, engine };
   return {
     shared: { db: db as unknown as Kysely<never>, engine: engine.name },
@@ -50,3 +47,23 @@ export async function openStore(settings: Pick<Settings, 'DATABASE_URL' | 'DATA_
     close: () => db.destroy(),
   };
 }
+
+async function openDatabase(settings: EngineSettings, connections: number): Promise<Database> {
+  const engine = openEngine(settings, connections);
+  const db = new Kysely<Tables>({ dialect: engine.dialect });
+  const { error } = await new Migrator({ db, provider: migrations(engine) }).migrateToLatest();
+  if (error === undefined) return { db, engine };
+  await db.destroy();
+  throw error;
+}
+
+/** Says which setting to look at, and never the password in it. */
+function cannotOpen({ DATABASE_URL, DATA_DIR }: EngineSettings, error: unknown): string {
+  const reason = reasonOf(error);
+  if (!DATABASE_URL) return `LEEBOARD_DATA_DIR: the database in ${DATA_DIR} cannot be opened: ${reason}`;
+  const { hostname, port, pathname } = new URL(DATABASE_URL);
+  return `LEEBOARD_DATABASE_URL: PostgreSQL at ${hostname}${port ? `:${port}` : ''}${pathname} cannot be used: ${reason}`;
+}
+
+/** Several addresses that all failed come as one error without words of its own. */
+const reasonOf = (error: unknown): string => (error instanceof AggregateError ? error.errors.map(reasonOf).join('; ') : error instanceof Error ? error.message : String(error));

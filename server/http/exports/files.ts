@@ -28,9 +28,9 @@ export const zonesCsv = (exported: Exported): Readable => Readable.from(table(ex
 export const assetsCsv = (exported: Exported, rows: AssetRows): Readable => Readable.from(table(exported, ASSET_COLUMNS, rows.count, rows.row), { objectMode: false });
 
 /** The swath with its heading as a foreign member (RFC 7946, section 6.1). */
-export function swathGeoJson(exported: Exported, peak: Uint8Array): string {
+export function swathGeoJson(exported: Exported, peak: Uint8Array): Buffer {
   const { features } = JSON.parse(new TextDecoder().decode(peak)) as { features: unknown[] };
   const { event, impact, advisory } = exported;
   const about = { exercise: event.exercise, eventId: event.id, advisoryId: advisory.id, advisoryNumber: advisory.number, issuedAt: advisory.issuedAt, revision: impact.revision, note: headingOf(exported) };
-  return JSON.stringify({ type: 'FeatureCollection', about, features });
+  return Buffer.from(JSON.stringify({ type: 'FeatureCollection', about, features }));
 }

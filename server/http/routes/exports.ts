@@ -38,7 +38,7 @@ export function exportRoutes(app: Api, services: HttpServices, assetsOf: ReturnT
       if (!advisory) throw new Error(`Revision ${impact.revision} stands on advisory ${impact.advisoryId}, which is not stored.`);
       const exported: Exported = { event, impact, advisory, now: nowOf(services, event), version };
       const [what, ending] = name.split('.');
-      void reply.headers({ 'content-disposition': asAttachment(`${fileStem(exported, what)}.${ending}`), 'cache-control': 'no-store', 'content-type': ending === 'csv' ? 'text/csv; charset=utf-8; header=present' : 'application/geo+json' });
+      void reply.headers({ 'content-disposition': asAttachment(`${fileStem(exported, what)}.${ending}`), 'cache-control': 'no-store', 'content-type': ending === 'csv' ? 'text/csv; charset=utf-8' : 'application/geo+json' });
       switch (name) {
         case 'zones.csv':
           return reply.send(zonesCsv(exported));

@@ -52,8 +52,9 @@ describe('the running API', () => {
   test('refuses a forged call with a good session, and does nothing', async () => {
     const cookie = await signedIn(world);
     const forged = (headers: Record<string, string>) => world.call({ method: 'POST', url: '/api/v1/events', as: null, payload: { name: 'Forged', timeZone: 'UTC', exercise: false }, headers: { cookie, ...headers } });
-    for (const headers of [{ origin: 'https://elsewhere.example' }, { origin: 'http://localhost:3000' }, { 'sec-fetch-site': 'cross-site' }]) {
-      const answer = await forged(headers as Record<string, string>);
+    const foreign: Record<string, string>[] = [{ origin: 'https://elsewhere.example' }, { origin: 'http://localhost:3000' }, { 'sec-fetch-site': 'cross-site' }];
+    for (const headers of foreign) {
+      const answer = await forged(headers);
       expect(problemOf(answer)).toMatchObject({ status: 403, type: 'urn:leeboard:problem:foreign-origin' });
     }
     expect((await world.call({ url: '/api/v1/events' })).json<{ total: number }>().total).toBe(0);

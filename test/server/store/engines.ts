@@ -23,12 +23,15 @@ async function sqlite(): Promise<Opened> {
   };
 }
 
-/** PostgreSQL compiled to WebAssembly behind a socket, so that the real driver and its pool are what is tested. */
+/**
+ * PostgreSQL compiled to WebAssembly behind a socket, so that the real driver and its pool are what is tested. One connection:
+ * it is one session, and messages of several would mix (electric-sql/pglite issue 1046).
+ */
 async function postgres(): Promise<Opened> {
   const database = await PGlite.create();
-  const server = new PGLiteSocketServer({ db: database, port: 0, host: '127.0.0.1', maxConnections: 8 });
+  const server = new PGLiteSocketServer({ db: database, port: 0, host: '127.0.0.1' });
   await server.start();
-  const store = await openStore({ DATA_DIR: '', DATABASE_URL: `postgres://postgres@${server.getServerConn()}/postgres` });
+  const store = await openStore({ DATA_DIR: '', DATABASE_URL: `postgres://postgres@${server.getServerConn()}/postgres` }, { connections: 1 });
   return {
     store,
     async close() {
@@ -39,7 +42,15 @@ async function postgres(): Promise<Opened> {
   };
 }
 
+/** A PostgreSQL of your own, with an empty database for these tests alone: many connections, and real locks between them. */
+const ownServer = process.env.LEEBOARD_TEST_DATABASE_URL;
+async function postgresServer(): Promise<Opened> {
+  const store = await openStore({ DATA_DIR: '', DATABASE_URL: ownServer });
+  return { store, close: () => store.close() };
+}
+
 export const ENGINES: [string, () => Promise<Opened>][] = [
   ['SQLite', sqlite],
   ['PostgreSQL', postgres],
+  ...(ownServer ? [['a PostgreSQL server', postgresServer] as [string, () => Promise<Opened>]] : []),
 ];

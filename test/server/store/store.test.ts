@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import type { Impact } from '../../../lib/impact';
 import { tabulate } from '../../../lib/impact';
@@ -7,7 +8,6 @@ import { recurving } from '../../hazard/storms';
 import { ENGINES } from './engines';
 import type { Opened } from './engines';
 
-let serial = 0;
 
 describe.each(ENGINES)('the store on %s', (_, open) => {
   let opened: Opened;
@@ -17,7 +17,7 @@ describe.each(ENGINES)('the store on %s', (_, open) => {
   }, 60_000);
   afterAll(() => opened.close());
   beforeEach(async () => {
-    eventId = `event-${++serial}`;
+    eventId = randomUUID();
     await opened.store.events.add({ id: eventId, name: 'Quillon', timeZone: 'Etc/GMT+3', exercise: true, demo: false, clock: null, createdAt: '2031-09-19T09:00:00.000Z' });
   });
 
