@@ -124,6 +124,49 @@ describe.each(ENGINES)('the store on %s', (_, open) => {
     expect((await opened.store.layers.list(eventId, { offset: 0, limit: 10 })).total).toBe(3);
   });
 
+  test('a layer comes back byte for byte, whatever it holds', async () => {
+    const bytes = Uint8Array.from({ length: 300_000 }, (_, i) => (i * 7919) % 256);
+    const layer = await opened.store.layers.add({ eventId, kind: 'assets', name: 'Any', rows: 1, classes: [], source: { bytes, contentType: 'text/csv', fileName: 'any.csv' }, receivedAt: '2031-09-19T09:00:00.000Z', receivedBy: 'Mara' });
+    const source = await opened.store.layers.source(eventId, layer.id);
+    expect(Buffer.compare(source!.bytes, bytes)).toBe(0);
+    expect(source).toMatchObject({ contentType: 'text/csv', fileName: 'any.csv' });
+  });
+
+  test('an advisory is found by the key it was sent with, in its own event', async () => {
+    const { advisory: stored } = await opened.store.advisories.add(advisory('5', '2031-09-19T09:00:00Z', { idempotencyKey: 'k' }));
+    expect(await opened.store.advisories.ofKey(eventId, 'k')).toEqual(stored);
+    expect(await opened.store.advisories.ofKey(eventId, 'other')).toBeNull();
+    expect(await opened.store.advisories.ofKey('elsewhere', 'k')).toBeNull();
+  });
+
+  test('what belongs to one event is not found in another', async () => {
+    const { advisory: stored } = await opened.store.advisories.add(advisory('5', '2031-09-19T09:00:00Z'));
+    const other = randomUUID();
+    expect(await opened.store.advisories.get(other, stored.id)).toBeNull();
+    expect(await opened.store.advisories.source(other, stored.id)).toBeNull();
+    expect(await opened.store.impacts.get(other, 1)).toBeNull();
+  });
+
+  test('nothing is put into an event that is not there, and half a thing never', async () => {
+    await expect(opened.store.advisories.add(advisory('5', '2031-09-19T09:00:00Z', { eventId: 'nowhere' }))).rejects.toThrow('There is no event nowhere.');
+    await expect(opened.store.impacts.publish({ impact: impact('no-advisory'), bulk: {} })).rejects.toThrow(/foreign key/i);
+    expect(await opened.store.events.get(eventId)).toMatchObject({ revision: 0, advisoryId: null });
+    expect(await opened.store.impacts.current(eventId)).toBeNull();
+  });
+
+  test('impacts published at once each get a revision of their own, with none left out', async () => {
+    const { advisory: stored } = await opened.store.advisories.add(advisory('5', '2031-09-19T09:00:00Z'));
+    const published = await Promise.all(Array.from({ length: 6 }, () => opened.store.impacts.publish({ impact: impact(stored.id), bulk: { peak: Uint8Array.of(1) } })));
+    expect(published.map(({ revision }) => revision).sort()).toEqual([1, 2, 3, 4, 5, 6]);
+  });
+
+  test('a log entry sent twice with one key is there once', async () => {
+    const entry = { eventId, kind: 'note' as const, text: 'x', zoneId: 'Z1', by: 'Mara', at: '2031-09-19T09:00:00.000Z', recordedAt: '2026-12-01T10:00:00.000Z' };
+    const first = await opened.store.log.add(entry, 'k');
+    expect(await opened.store.log.add({ ...entry, text: 'y' }, 'k')).toEqual({ entry: first.entry, repeated: true });
+    expect((await opened.store.log.list(eventId, { offset: 0, limit: 10 })).items).toEqual([first.entry]);
+  });
+
   test('the log only grows, newest first', async () => {
     const entry = (text: string) => ({ eventId, kind: 'decision' as const, text, zoneId: null, by: 'Mara', at: '2031-09-19T09:00:00.000Z', recordedAt: '2026-12-01T10:00:00.000Z' });
     await opened.store.log.add(entry('Saltmarsh ordered'), null);
