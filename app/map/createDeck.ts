@@ -25,6 +25,7 @@ export function createDeck(parent: HTMLDivElement, { onMove, onReady, onFailed }
     controller: { dragRotate: false, touchRotate: false, keyboard: false, doubleClickZoom: true, scrollZoom: { speed: 0.008, smooth: false } },
     viewState: { longitude: 0, latitude: 20, zoom: 2 },
     layers: [],
+    deviceProps: { type: 'webgl', webgl: { preserveDrawingBuffer: false } },
     useDevicePixels: Math.min(2, window.devicePixelRatio || 1),
     // Places are picked on the processor (see pick.ts): no read-back from the graphics card.
     _pickable: false,

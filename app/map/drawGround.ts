@@ -1,17 +1,18 @@
-import { LineLayer, PathLayer, SolidPolygonLayer } from '@deck.gl/layers';
+import { LineLayer, SolidPolygonLayer } from '@deck.gl/layers';
 import type { Layer } from '@deck.gl/core';
-import type { Position } from 'geojson';
 import type { Land } from './land';
 import type { Palette } from './palette';
 import { withAlpha } from './palette';
 import type { Polygon } from './shapes';
+import { byLevel, segmentsOf, thinLine } from './thinLine';
+import type { Segment } from './thinLine';
 
 /** Graticule under everything, then land. Sea is the paper. */
-export function drawGround(lands: { id: string; land: Land }[], graticuleStep: number, palette: Palette): Layer[] {
+export function drawGround(lands: { id: string; land: Land }[], lines: Segment[], palette: Palette): Layer[] {
   return [
-    new LineLayer<[Position, Position]>({
-      id: `graticule-${graticuleStep}`,
-      data: graticuleLines(graticuleStep),
+    new LineLayer<Segment>({
+      id: 'graticule',
+      data: lines,
       getSourcePosition: ([from]) => from as [number, number],
       getTargetPosition: ([, to]) => to as [number, number],
       getColor: palette.graticule,
@@ -33,31 +34,20 @@ export function drawGround(lands: { id: string; land: Land }[], graticuleStep: n
   ];
 }
 
+const shore = byLevel((land: Land, level) => segmentsOf(land.outlines.map((line) => thinLine(line, level))));
+
 /** Coastlines, over the swath so that the shore stays readable. */
-export const drawCoast = (lands: { id: string; land: Land }[], palette: Palette): Layer[] =>
+export const drawCoast = (lands: { id: string; land: Land }[], level: number, palette: Palette): Layer[] =>
   lands.map(
     ({ id, land }) =>
-      new PathLayer<Position[]>({
+      new LineLayer<Segment>({
         id: `coast-${id}`,
-        data: land.outlines,
-        getPath: (line) => line as [number, number][],
+        data: shore(land, level),
+        getSourcePosition: ([from]) => from as [number, number],
+        getTargetPosition: ([, to]) => to as [number, number],
         getColor: withAlpha(palette.coast, 0.85),
         getWidth: 1,
         widthUnits: 'pixels',
         updateTriggers: { getColor: palette.theme },
       }),
   );
-
-const lineCache = new Map<number, [Position, Position][]>();
-
-/** Meridians and parallels are straight on this map: one piece a quarter of the globe keeps single precision exact enough. */
-function graticuleLines(step: number): [Position, Position][] {
-  let lines = lineCache.get(step);
-  if (!lines) {
-    lines = [];
-    for (let lon = -180; lon < 180; lon += step) for (let lat = -80; lat < 80; lat += 20) lines.push([[lon, lat], [lon, lat + 20]]);
-    for (let lat = -80; lat <= 80; lat += step) for (let lon = -180; lon < 180; lon += 30) lines.push([[lon, lat], [lon + 30, lat]]);
-    lineCache.set(step, lines);
-  }
-  return lines;
-}

@@ -8,6 +8,7 @@ import { outlinesOf } from './shapes';
 import type { Polygon } from './shapes';
 import type { Palette, Rgba } from './palette';
 import { rgba, withAlpha } from './palette';
+import { byLevel, thinLine } from './thinLine';
 
 /** How much of the ground each band hides: land and zones stay readable under all of them. */
 const COVER: Record<Palette['theme'], Record<ThresholdKey, number>> = {
@@ -30,27 +31,15 @@ function fill(area: Area, palette: Palette): Rgba {
 
 const edge = (area: Area, palette: Palette): Rgba => (area.chance === null ? palette.band[band(area)].edge : rgba(chanceColour(palette.theme, area.chance)));
 
-const cache = new WeakMap<Swath, { pieces: Piece[]; lines: { area: Area; line: Position[] }[] }>();
-
-function parts(swath: Swath) {
-  let found = cache.get(swath);
-  if (!found) {
-    found = {
-      pieces: swath.areas.flatMap((area) => area.polygons.map((polygon) => ({ area, polygon }))),
-      lines: swath.areas.flatMap((area) => outlinesOf(area.polygons).map((line) => ({ area, line }))),
-    };
-    cache.set(swath, found);
-  }
-  return found;
-}
+const pieces = byLevel((swath: Swath) => swath.areas.flatMap((area) => area.polygons.map((polygon): Piece => ({ area, polygon }))));
+const lines = byLevel((swath: Swath, level) => swath.areas.flatMap((area) => outlinesOf(area.polygons).map((line) => ({ area, line: thinLine(line, level) }))));
 
 /** The bands of one revision: weakest below, each with its edge. */
-export function drawSwath(swath: Swath, palette: Palette): Layer[] {
-  const { pieces, lines } = parts(swath);
+export function drawSwath(swath: Swath, level: number, palette: Palette): Layer[] {
   return [
     new SolidPolygonLayer<Piece>({
       id: 'swath',
-      data: pieces,
+      data: pieces(swath, 0),
       getPolygon: ({ polygon }) => polygon as [number, number][][],
       getFillColor: ({ area }) => fill(area, palette),
       extruded: false,
@@ -58,7 +47,7 @@ export function drawSwath(swath: Swath, palette: Palette): Layer[] {
     }),
     new PathLayer<{ area: Area; line: Position[] }>({
       id: 'swath-edge',
-      data: lines,
+      data: lines(swath, level),
       getPath: ({ line }) => line as [number, number][],
       getColor: ({ area }) => edge(area, palette),
       getWidth: 1.25,

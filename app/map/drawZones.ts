@@ -1,30 +1,19 @@
-import { PathLayer, SolidPolygonLayer } from '@deck.gl/layers';
+import { LineLayer, SolidPolygonLayer } from '@deck.gl/layers';
 import type { Layer } from '@deck.gl/core';
-import type { Position } from 'geojson';
 import type { ZoneShape } from '../live/bulk';
 import { bandOf } from '../theme/bands';
 import { outlinesOf } from './shapes';
 import type { Polygon } from './shapes';
 import type { Palette, Rgba } from './palette';
 import { withAlpha } from './palette';
+import { byLevel, segmentsOf, thinLine } from './thinLine';
+import type { Segment } from './thinLine';
 
-const cache = new WeakMap<ZoneShape[], { pieces: { id: string; polygon: Polygon }[]; lines: { id: string; line: Position[] }[] }>();
-
-function parts(zones: ZoneShape[]) {
-  let found = cache.get(zones);
-  if (!found) {
-    found = {
-      pieces: zones.flatMap((zone) => zone.polygons.map((polygon) => ({ id: zone.id, polygon }))),
-      lines: zones.flatMap((zone) => outlinesOf(zone.polygons).map((line) => ({ id: zone.id, line }))),
-    };
-    cache.set(zones, found);
-  }
-  return found;
-}
+const pieces = byLevel((zones: ZoneShape[]) => zones.flatMap((zone) => zone.polygons.map((polygon) => ({ id: zone.id, polygon }))));
+const lines = byLevel((zones: ZoneShape[], level) => segmentsOf(zones.flatMap((zone) => outlinesOf(zone.polygons)).map((line) => thinLine(line, level))));
 
 /** Zones tinted by the greatest wind that reaches them, with thin outlines. `winds` is kt by zone id; `windKey` changes with it. */
-export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>, palette: Palette, windKey: number): { fills: Layer[]; lines: Layer[] } {
-  const { pieces, lines } = parts(zones);
+export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>, level: number, palette: Palette, windKey: number): { fills: Layer[]; lines: Layer[] } {
   const tint = (id: string): Rgba => {
     const band = bandOf(winds.get(id) ?? 0);
     return band ? withAlpha(palette.band[band].fill, 0.22) : [0, 0, 0, 0];
@@ -33,7 +22,7 @@ export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>
     fills: [
       new SolidPolygonLayer<{ id: string; polygon: Polygon }>({
         id: 'zones',
-        data: pieces,
+        data: pieces(zones, 0),
         getPolygon: ({ polygon }) => polygon as [number, number][][],
         getFillColor: ({ id }) => tint(id),
         extruded: false,
@@ -41,10 +30,11 @@ export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>
       }),
     ],
     lines: [
-      new PathLayer<{ id: string; line: Position[] }>({
+      new LineLayer<Segment>({
         id: 'zone-outlines',
-        data: lines,
-        getPath: ({ line }) => line as [number, number][],
+        data: lines(zones, level),
+        getSourcePosition: ([from]) => from as [number, number],
+        getTargetPosition: ([, to]) => to as [number, number],
         getColor: withAlpha(palette.ink, 0.4),
         getWidth: 0.75,
         widthUnits: 'pixels',

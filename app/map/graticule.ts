@@ -1,3 +1,4 @@
+import type { Position } from 'geojson';
 import { unproject } from './mercator';
 import type { Camera, Size } from './mercator';
 
@@ -30,4 +31,13 @@ export function graticule(camera: Camera, size: Size): Graticule {
     return Array.from({ length: Math.max(0, Math.min(400, last - first + 1)) }, (_, i) => Number(((first + i) * step).toFixed(4)));
   };
   return { step, decimals: step >= 1 ? 0 : step >= 0.5 ? 1 : 2, lats: lines(south, north), lons: lines(camera.lon - halfLon, camera.lon + halfLon) };
+}
+
+/** Lines to draw for a box: meridians and parallels are straight on this map, so that each is one piece. */
+export function graticuleLines({ step, west, east, south, north }: { step: number; west: number; east: number; south: number; north: number }): [Position, Position][] {
+  const between = (from: number, to: number): number[] => Array.from({ length: Math.floor(to / step + 1e-9) - Math.ceil(from / step - 1e-9) + 1 }, (_, i) => (Math.ceil(from / step - 1e-9) + i) * step);
+  return [
+    ...between(west, east).map((lon): [Position, Position] => [[lon, south], [lon, north]]),
+    ...between(south, north).map((lat): [Position, Position] => [[west, lat], [east, lat]]),
+  ];
 }

@@ -43,24 +43,23 @@ const FINE_ZOOM = 5.5;
 const COARSE = '/land/land-50m.json';
 const FINE = '/land/land-10m.json';
 
-/** The box holds the view with as much again on every side, in steps, so that panning seldom asks for another. */
-export function landWish(camera: Camera, size: Size): LandWish {
-  if (camera.zoom < FINE_ZOOM || size.width === 0) return { path: COARSE, box: null };
-  const step = 5;
+/** A box that holds the view with as much again on every side, in steps, so that panning seldom asks for another. */
+export function boxAround(camera: Camera, size: Size): Bounds {
   const half = ((size.width / 2) * 360) / (512 * 2 ** camera.zoom);
   const [, north] = unproject(camera, size, 0, 0);
   const [, south] = unproject(camera, size, 0, size.height);
   const tall = north - south;
+  const step = camera.zoom < 4 ? 30 : 5;
   return {
-    path: FINE,
-    box: {
-      west: Math.floor((camera.lon - 2 * half) / step) * step - step,
-      east: Math.ceil((camera.lon + 2 * half) / step) * step + step,
-      south: Math.max(-90, Math.floor((south - tall / 2) / step) * step - step),
-      north: Math.min(90, Math.ceil((north + tall / 2) / step) * step + step),
-    },
+    west: Math.floor((camera.lon - 2 * half) / step) * step - step,
+    east: Math.ceil((camera.lon + 2 * half) / step) * step + step,
+    south: Math.max(-85, Math.floor((south - tall / 2) / step) * step - step),
+    north: Math.min(85, Math.ceil((north + tall / 2) / step) * step + step),
   };
 }
+
+export const landWish = (camera: Camera, size: Size): LandWish =>
+  camera.zoom < FINE_ZOOM || size.width === 0 ? { path: COARSE, box: null } : { path: FINE, box: boxAround(camera, size) };
 
 export async function loadLand({ path, box }: LandWish): Promise<Land> {
   const polygons = await loadPolygons(path);

@@ -71,12 +71,12 @@ export function marksWhere(marks: Marks, wanted: (className: string) => boolean)
   return chosen;
 }
 
-const CELL_PX = 2;
+const CELL_PX = 5;
 /** From here on every dot has room of its own. */
 const ALL_FROM_ZOOM = 11;
 
 /**
- * Of the marks that fall on one spot of the screen at a zoom level (a cell of two pixels), the one with the strongest wind: what
+ * Of the marks that fall on one spot of the screen at a zoom level (a cell of five pixels), the one with the strongest wind: what
  * would be drawn over and over is drawn once. Counts never use this.
  */
 export function thinned(marks: Marks, chosen: readonly number[], zoomLevel: number): number[] {

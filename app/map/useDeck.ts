@@ -6,6 +6,8 @@ import { createDeck } from './createDeck';
 import type { DeckMap } from './createDeck';
 import type { MapState } from './mapState';
 
+const TOGETHER_MS = 80;
+
 /** Mounts the one deck.gl into `parent`, keeps its camera and size in the map's state, and hands it the layers. */
 export function useDeck(parent: RefObject<HTMLDivElement | null>, map: StoreApi<MapState>, layers: Layer[]): void {
   const deck = useRef<DeckMap | null>(null);
@@ -43,6 +45,8 @@ export function useDeck(parent: RefObject<HTMLDivElement | null>, map: StoreApi<
   }, [parent, map]);
   useEffect(() => {
     newest.current = layers;
-    deck.current?.setLayers(layers);
+    // A new revision comes in parts (areas, marks, zones): they are drawn together, after the figures.
+    const timer = setTimeout(() => deck.current?.setLayers(layers), TOGETHER_MS);
+    return () => clearTimeout(timer);
   }, [layers]);
 }

@@ -9,8 +9,8 @@ import { drawMarks, prepareMarks } from './drawMarks';
 import { drawSwath } from './drawSwath';
 import { drawZones } from './drawZones';
 import { makeGlyphAtlas } from './glyphAtlas';
-import { graticuleStep } from './graticule';
-import { landWish, loadLand } from './land';
+import { graticuleLines, graticuleStep } from './graticule';
+import { boxAround, landWish, loadLand } from './land';
 import type { Land, LandWish } from './land';
 import type { MapState } from './mapState';
 import { palette } from './palette';
@@ -35,7 +35,8 @@ function useLand(wish: string | null): Land | null {
 export function useLayers(map: StoreApi<MapState>): Layer[] {
   const theme = useStore(themeStore, (state) => state.theme);
   const paint = useMemo(() => palette(theme, (name) => getComputedStyle(document.documentElement).getPropertyValue(name)), [theme]);
-  const step = useStore(map, (state) => graticuleStep(state.camera));
+  // As text, so that a view within the same box draws nothing anew.
+  const grid = useStore(map, (state) => JSON.stringify({ step: graticuleStep(state.camera), ...boxAround(state.camera, state.size) }));
   const wish = useStore(map, (state) => JSON.stringify(landWish(state.camera, state.size)));
   const zoom = useStore(map, (state) => Math.round(state.camera.zoom * 4) / 4);
   const world = useLand(wish);
@@ -49,21 +50,22 @@ export function useLayers(map: StoreApi<MapState>): Layer[] {
   const preview = useView((state) => state.preview !== null);
   const atlas = useMemo(() => makeGlyphAtlas(), []);
 
+  const meridians = useMemo(() => graticuleLines(JSON.parse(grid) as Parameters<typeof graticuleLines>[0]), [grid]);
   const lands = useMemo(() => [...(world ? [{ id: 'world', land: world }] : []), ...(coast ? [{ id: 'demo', land: coast }] : [])], [world, coast]);
   const winds = useMemo(() => new Map(impact?.zones.map((zone) => [zone.id, zone.maxWindKt])), [impact]);
   const level = Math.floor(zoom);
   const drawn = useMemo(() => marks && prepareMarks(marks, hidden, level, paint), [marks, hidden, level, paint]);
 
   return useMemo(() => {
-    const { fills, lines } = drawZones(zones, preview ? new Map() : winds, paint, preview ? 0 : (impact?.revision ?? 0));
+    const { fills, lines } = drawZones(zones, preview ? new Map() : winds, level, paint, preview ? 0 : (impact?.revision ?? 0));
     return [
-      ...drawGround(lands, step, paint),
+      ...drawGround(lands, meridians, paint),
       ...fills,
       // A forecast that is only looked at has no swath yet: the one of the last revision would mislead.
-      ...(swath && !preview ? drawSwath(swath, paint) : []),
-      ...drawCoast(lands, paint),
+      ...(swath && !preview ? drawSwath(swath, level, paint) : []),
+      ...drawCoast(lands, level, paint),
       ...lines,
       ...(drawn && marks && !preview ? drawMarks(drawn, atlas, zoom, paint, `${paint.theme}-${marks.revision}-${[...hidden].join()}-${level}`) : []),
     ];
-  }, [lands, step, paint, zones, winds, impact?.revision, swath, preview, drawn, marks, atlas, zoom, level, hidden]);
+  }, [lands, meridians, paint, zones, winds, impact?.revision, swath, preview, drawn, marks, atlas, zoom, level, hidden]);
 }

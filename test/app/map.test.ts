@@ -10,6 +10,7 @@ import { clipPolygons, withoutBox } from '../../app/map/clip';
 import { graticule } from '../../app/map/graticule';
 import { placeLabels } from '../../app/map/labels';
 import { scaleLength } from '../../app/map/scaleBar';
+import { thinLine } from '../../app/map/thinLine';
 import { outlinesOf, polygonHolds, polygonsOf, runOnPolygon } from '../../app/map/shapes';
 
 function naturalEarth() {
@@ -126,6 +127,25 @@ describe('land around a view', () => {
   test('has no shore where it was cut', () => {
     const lines = withoutBox(outlinesOf(clipPolygons(land, bounds)), bounds);
     for (const line of lines) for (let i = 1; i < line.length; i++) expect(line[i][0] === -90 && line[i - 1][0] === -90).toBe(false);
+  });
+});
+
+describe('a line from afar', () => {
+  const line = Array.from({ length: 1000 }, (_, i) => [i / 10_000, Math.sin(i / 50) / 500]);
+
+  test('keeps its ends, and no point strays from it by two pixels', () => {
+    const thin = thinLine(line, 7);
+    expect(thin.length).toBeLessThan(line.length / 3);
+    expect([thin[0], thin[thin.length - 1]]).toEqual([line[0], line[999]]);
+    const camera = { lon: 0, lat: 0, zoom: 8 };
+    for (const [lon, lat] of line) {
+      const [x, y] = project(camera, size, lon, lat);
+      expect(Math.min(...thin.map(([a, b]) => Math.hypot(project(camera, size, a, b)[0] - x, project(camera, size, a, b)[1] - y)))).toBeLessThan(2);
+    }
+  });
+
+  test('is drawn whole when one is near', () => {
+    expect(thinLine(line, 11)).toBe(line);
   });
 });
 
