@@ -18,7 +18,7 @@ export function csvRows(text: string): CsvRows {
   if (!Array.isArray(lines)) return { ok: false, errors: [lines] };
   const [header, ...body] = lines;
   if (!header) return { ok: false, errors: [{ row: 1, message: 'the file is empty' }] };
-  if (body.length === 0) return { ok: false, errors: [{ row: header.row, message: 'the file has a header but no rows below it' }] };
+  if (body.length === 0) return { ok: false, errors: [{ row: header.row, message: 'the file has one row: the first names the columns, and the rows below it hold the values' }] };
   // Spreadsheets leave separators behind where columns were emptied.
   const width = header.cells.reduce((last, name, i) => (name === '' ? last : i + 1), 0);
   const columns = header.cells.slice(0, width);

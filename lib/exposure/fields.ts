@@ -32,7 +32,7 @@ export const isPositionColumn = (column: string): boolean => [...NAMES.lat, ...N
 
 /** How a value is shown in an error. */
 export const shown = (value: unknown): string => {
-  const text = typeof value === 'string' ? `"${value}"` : JSON.stringify(value) ?? String(value);
+  const text = typeof value === 'string' ? `"${value}"` : JSON.stringify(value) ?? 'nothing';
   return text.length > 44 ? `${text.slice(0, 40)}…` : text;
 };
 
