@@ -8,7 +8,10 @@ import { place, polygon, polygonWithHole } from './shapes';
 import { square } from './readings';
 
 describe('a line', () => {
-  /** Corners up to L = 45 km apart: straight in degrees (RFC 7946, 3.1.1) is then within L^2 tan(lat) / 8R = 20 m of turf's great circle. */
+  /**
+   * Corners up to 33 km apart east and north. Straight in degrees (RFC 7946, 3.1.1) then keeps within L^2 tan(lat) / 8R = 20 m of
+   * turf's great circle, and Lx Ly tan(lat) / 8R = 10 m along it.
+   */
   const winding = fc.array(place, { minLength: 2, maxLength: 12 }).map((corners) => corners.map(([lon, lat]) => [-48 + (lon + 48) / 10, 25 + (lat - 25) / 10]));
 
   test('is looked at every two kilometres at most along it, from one end to the other, at the places turf finds there', () => {
@@ -19,7 +22,7 @@ describe('a line', () => {
         const stepKm = length(line) / (places.length - 1);
         expect(stepKm).toBeLessThanOrEqual(2);
         expect([places[0], places[places.length - 1]]).toEqual([corners[0], corners[corners.length - 1]]);
-        places.forEach((one, k) => expect(distance(one, along(line, k * stepKm))).toBeLessThan(0.02));
+        places.forEach((one, k) => expect(distance(one, along(line, k * stepKm))).toBeLessThan(0.025));
       }),
       { numRuns: 30, seed: 3 },
     );
