@@ -20,6 +20,7 @@ export interface Area {
 
 export interface Swath {
   revision: number;
+  advisoryId: string;
   product: Product;
   areas: Area[];
 }
@@ -27,7 +28,7 @@ export interface Swath {
 /** What is too large for the socket: fetched by revision over HTTP and kept until a newer one is whole. */
 export interface Bulk {
   swath: Swath | null;
-  marks: (Marks & { revision: number }) | null;
+  marks: Marks | null;
   layers: Layer[];
   zones: ZoneShape[];
   /** Oldest first. */

@@ -50,12 +50,18 @@ export function followRevisions({ store, session }: LiveEvent, bulk: StoreApi<Bu
     const wish = `${impact.revision} ${product}`;
     // Chances exist once members do; until then the swath of the track stands in.
     const shown = impact.stage === 'members' ? product : 'peak';
-    if (wish !== asked.swath) {
+    const held = bulk.getState().swath;
+    // Members change nothing on the forecast track: the revision that brings them has the areas and marks of the one before.
+    const asBefore = impact.stage === 'members' && held?.revision === impact.revision - 1 && held.advisoryId === impact.advisoryId;
+    if (wish !== asked.swath && asBefore && held.product === shown) {
+      asked.swath = wish;
+      bulk.setState({ swath: { ...held, revision: impact.revision } });
+    } else if (wish !== asked.swath) {
       asked.swath = wish;
       swath(
         async (signal) => {
           const areas = readSwath(await fetchSwath(eventId, impact.revision, shown, signal));
-          bulk.setState({ swath: { revision: impact.revision, product: shown, areas }, trouble: null });
+          bulk.setState({ swath: { revision: impact.revision, advisoryId: impact.advisoryId, product: shown, areas }, trouble: null });
         },
         () => {
           asked.swath = '';
@@ -64,8 +70,9 @@ export function followRevisions({ store, session }: LiveEvent, bulk: StoreApi<Bu
       );
     }
     if (impact.revision !== asked.marks) {
+      const before = asked.marks;
       asked.marks = impact.revision;
-      marks(async (signal) => bulk.setState({ marks: { ...(await fetchMarks(eventId, impact.revision, signal)), revision: impact.revision } }), quiet);
+      if (!(asBefore && before === impact.revision - 1 && bulk.getState().marks)) marks(async (signal) => bulk.setState({ marks: await fetchMarks(eventId, impact.revision, signal) }), quiet);
       layers(async (signal) => {
         const found = await fetchLayers(eventId, signal);
         bulk.setState({ layers: found });

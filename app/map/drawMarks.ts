@@ -8,7 +8,8 @@ import type { Palette, Rgba } from './palette';
 import { withAlpha } from './palette';
 
 export interface DrawnMarks {
-  dots: MarkColumns;
+  /** As the map takes it: the same object for as long as nothing changes. */
+  dots: { length: number; attributes: Record<string, { value: Float64Array | Uint8Array; size: number; normalized?: boolean }> };
   glyphs: { index: number; glyph: string; position: [number, number]; sizePx: number; colour: Rgba }[];
 }
 
@@ -19,7 +20,7 @@ const CROWD = 200;
 export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, zoomLevel: number, palette: Palette): DrawnMarks {
   const classes = new Map(markClasses(marks).map((one) => [one.name, one]));
   const shown = (name: string): boolean => !hidden.has(name);
-  const dots = markColumns(marks, thinned(marks, marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph === 'dot'), zoomLevel), palette);
+  const dots = dotData(markColumns(marks, thinned(marks, marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph === 'dot'), zoomLevel), palette));
   const chosen = marksWhere(marks, (name) => shown(name) && classes.get(name)?.glyph !== 'dot');
   const columns = markColumns(marks, chosen, palette);
   const glyphs = Array.from(columns.index, (index, i) => ({
@@ -32,22 +33,27 @@ export function prepareMarks(marks: Marks, hidden: ReadonlySet<string>, zoomLeve
   return { dots, glyphs };
 }
 
-/** Dots by the ten thousand from typed arrays, shapes for what is few. `key` changes when the data does. */
-export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom: number, palette: Palette, key: string): Layer[] {
+const dotData = ({ index, positions, colours }: MarkColumns): DrawnMarks['dots'] => ({
+  length: index.length,
+  attributes: { getPosition: { value: positions, size: 2 }, getFillColor: { value: colours, size: 4, normalized: true } },
+});
+
+/** Dots by the ten thousand from typed arrays, shapes for what is few. */
+export function drawMarks({ dots, glyphs }: DrawnMarks, atlas: GlyphAtlas, zoom: number, palette: Palette): Layer[] {
   // Marks grow as one comes nearer; from afar thousands of dots are a tint, not a cover.
   const near = Math.max(0, Math.min(1, (zoom - 6) / 4));
   const icon = { data: glyphs, iconAtlas: atlas.image as unknown as string, iconMapping: atlas.mapping, sizeUnits: 'pixels' as const, sizeScale: 1 + 0.8 * near, getSize: (mark: DrawnMarks['glyphs'][number]) => mark.sizePx, getPosition: (mark: DrawnMarks['glyphs'][number]) => mark.position };
   return [
     new ScatterplotLayer({
-      id: `dots-${key}`,
-      data: { length: dots.index.length, attributes: { getPosition: { value: dots.positions, size: 2 }, getFillColor: { value: dots.colours, size: 4, normalized: true } } },
+      id: 'dots',
+      data: dots,
       radiusUnits: 'pixels',
       getRadius: 1,
       radiusScale: 0.75 + 2 * near,
       opacity: 0.45 + 0.45 * near,
       stroked: false,
     }),
-    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-under-${key}`, getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.halo, 0.85) }),
-    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: `glyph-${key}`, getIcon: (mark) => mark.glyph, getColor: (mark) => mark.colour }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: 'glyph-under', getIcon: (mark) => `${mark.glyph}-under`, getColor: withAlpha(palette.halo, 0.85) }),
+    new IconLayer<DrawnMarks['glyphs'][number]>({ ...icon, id: 'glyph', getIcon: (mark) => mark.glyph, getColor: (mark) => mark.colour }),
   ];
 }

@@ -1,7 +1,7 @@
 import { PathLayer, SolidPolygonLayer } from '@deck.gl/layers';
 import type { Layer } from '@deck.gl/core';
 import type { Position } from 'geojson';
-import type { Area, Swath } from '../live/bulk';
+import type { Area } from '../live/bulk';
 import { chanceColour } from '../theme/bands';
 import type { ThresholdKey } from '../../lib/units';
 import { outlinesOf } from './shapes';
@@ -31,15 +31,15 @@ function fill(area: Area, palette: Palette): Rgba {
 
 const edge = (area: Area, palette: Palette): Rgba => (area.chance === null ? palette.band[band(area)].edge : rgba(chanceColour(palette.theme, area.chance)));
 
-const pieces = byLevel((swath: Swath) => swath.areas.flatMap((area) => area.polygons.map((polygon): Piece => ({ area, polygon }))));
-const lines = byLevel((swath: Swath, level) => swath.areas.flatMap((area) => outlinesOf(area.polygons).map((line) => ({ area, line: thinLine(line, level) }))));
+const pieces = byLevel((areas: Area[]) => areas.flatMap((area) => area.polygons.map((polygon): Piece => ({ area, polygon }))));
+const lines = byLevel((areas: Area[], level) => areas.flatMap((area) => outlinesOf(area.polygons).map((line) => ({ area, line: thinLine(line, level) }))));
 
 /** The bands of one revision: weakest below, each with its edge. */
-export function drawSwath(swath: Swath, level: number, palette: Palette): Layer[] {
+export function drawSwath(areas: Area[], level: number, palette: Palette): Layer[] {
   return [
     new SolidPolygonLayer<Piece>({
       id: 'swath',
-      data: pieces(swath, 0),
+      data: pieces(areas, 0),
       getPolygon: ({ polygon }) => polygon as [number, number][][],
       getFillColor: ({ area }) => fill(area, palette),
       extruded: false,
@@ -47,7 +47,7 @@ export function drawSwath(swath: Swath, level: number, palette: Palette): Layer[
     }),
     new PathLayer<{ area: Area; line: Position[] }>({
       id: 'swath-edge',
-      data: lines(swath, level),
+      data: lines(areas, level),
       getPath: ({ line }) => line as [number, number][],
       getColor: ({ area }) => edge(area, palette),
       getWidth: 1.25,

@@ -1,7 +1,7 @@
 import { LineLayer, SolidPolygonLayer } from '@deck.gl/layers';
 import type { Layer } from '@deck.gl/core';
 import type { ZoneShape } from '../live/bulk';
-import { bandOf } from '../theme/bands';
+import type { ThresholdKey } from '../../lib/units';
 import { outlinesOf } from './shapes';
 import type { Polygon } from './shapes';
 import type { Palette, Rgba } from './palette';
@@ -12,10 +12,11 @@ import type { Segment } from './thinLine';
 const pieces = byLevel((zones: ZoneShape[]) => zones.flatMap((zone) => zone.polygons.map((polygon) => ({ id: zone.id, polygon }))));
 const lines = byLevel((zones: ZoneShape[], level) => segmentsOf(zones.flatMap((zone) => outlinesOf(zone.polygons)).map((line) => thinLine(line, level))));
 
-/** Zones tinted by the greatest wind that reaches them, with thin outlines. `winds` is kt by zone id; `windKey` changes with it. */
-export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>, level: number, palette: Palette, windKey: number): { fills: Layer[]; lines: Layer[] } {
+/** Zones tinted by the band that reaches them, with thin outlines. `bands` is a line `id=band` a zone. */
+export function drawZones(zones: ZoneShape[], bands: string, level: number, palette: Palette): { fills: Layer[]; lines: Layer[] } {
+  const bandById = new Map(bands.split('\n').map((line) => [line.slice(0, line.lastIndexOf('=')), line.slice(line.lastIndexOf('=') + 1)]));
   const tint = (id: string): Rgba => {
-    const band = bandOf(winds.get(id) ?? 0);
+    const band = bandById.get(id) as ThresholdKey | '' | undefined;
     return band ? withAlpha(palette.band[band].fill, 0.22) : [0, 0, 0, 0];
   };
   return {
@@ -26,7 +27,7 @@ export function drawZones(zones: ZoneShape[], winds: ReadonlyMap<string, number>
         getPolygon: ({ polygon }) => polygon as [number, number][][],
         getFillColor: ({ id }) => tint(id),
         extruded: false,
-        updateTriggers: { getFillColor: [palette.theme, windKey] },
+        updateTriggers: { getFillColor: [palette.theme, bands] },
       }),
     ],
     lines: [

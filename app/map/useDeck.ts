@@ -6,7 +6,7 @@ import { createDeck } from './createDeck';
 import type { DeckMap } from './createDeck';
 import type { MapState } from './mapState';
 
-const TOGETHER_MS = 80;
+const TOGETHER_MS = 200;
 
 /** Mounts the one deck.gl into `parent`, keeps its camera and size in the map's state, and hands it the layers. */
 export function useDeck(parent: RefObject<HTMLDivElement | null>, map: StoreApi<MapState>, layers: Layer[]): void {

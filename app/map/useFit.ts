@@ -23,7 +23,11 @@ export function useFit(map: StoreApi<MapState>): () => void {
     const places = zones.length > 0 ? zones.flatMap((zone) => zone.polygons.flatMap((polygon) => polygon[0] as [number, number][])) : (marks?.lon.map((lon, i) => [lon, marks.lat[i]] as const) ?? []);
     const bounds = preview ? boundsOf([...points, ...places.slice(0, 1)]) : (withStorm(boundsOf(places), points[0]) ?? boundsOf(points));
     if (!bounds) return;
-    map.setState({ camera: fitted(bounds, size, PADDING, 8), moved: false });
+    const camera = fitted(bounds, size, PADDING, 8);
+    const { camera: held } = map.getState();
+    // The same view again must not cost a redraw.
+    const same = held.lon === camera.lon && held.lat === camera.lat && held.zoom === camera.zoom;
+    map.setState({ camera: same ? held : camera, moved: false });
   }, [map, zones, marks, advisory, preview]);
 
   useEffect(() => {

@@ -4,6 +4,7 @@ import { useStore } from 'zustand';
 import type { StoreApi } from 'zustand/vanilla';
 import { useBulk, useLive, useView } from '../live/EventContext';
 import { themeStore } from '../prefs/theme';
+import { bandOf } from '../theme/bands';
 import { drawCoast, drawGround } from './drawGround';
 import { drawMarks, prepareMarks } from './drawMarks';
 import { drawSwath } from './drawSwath';
@@ -42,30 +43,31 @@ export function useLayers(map: StoreApi<MapState>): Layer[] {
   const world = useLand(wish);
   const demo = useLive((state) => state.event?.demo ?? false);
   const coast = useLand(demo ? DEMO_COAST : null);
-  const swath = useBulk((state) => state.swath);
+  const areas = useBulk((state) => state.swath?.areas);
   const zones = useBulk((state) => state.zones);
   const marks = useBulk((state) => state.marks);
-  const impact = useLive((state) => state.impact);
+  // Which band each zone is in: the same for the revision that only adds members, so that nothing is drawn again.
+  const bands = useLive((state) => state.impact?.zones.map((zone) => `${zone.id}=${bandOf(zone.maxWindKt) ?? ''}`).join('\n') ?? '');
   const hidden = useView((state) => state.hiddenClasses);
   const preview = useView((state) => state.preview !== null);
   const atlas = useMemo(() => makeGlyphAtlas(), []);
 
   const meridians = useMemo(() => graticuleLines(JSON.parse(grid) as Parameters<typeof graticuleLines>[0]), [grid]);
   const lands = useMemo(() => [...(world ? [{ id: 'world', land: world }] : []), ...(coast ? [{ id: 'demo', land: coast }] : [])], [world, coast]);
-  const winds = useMemo(() => new Map(impact?.zones.map((zone) => [zone.id, zone.maxWindKt])), [impact]);
+  const shown = preview ? '' : bands;
   const level = Math.floor(zoom);
   const drawn = useMemo(() => marks && prepareMarks(marks, hidden, level, paint), [marks, hidden, level, paint]);
 
   return useMemo(() => {
-    const { fills, lines } = drawZones(zones, preview ? new Map() : winds, level, paint, preview ? 0 : (impact?.revision ?? 0));
+    const { fills, lines } = drawZones(zones, shown, level, paint);
     return [
       ...drawGround(lands, meridians, paint),
       ...fills,
       // A forecast that is only looked at has no swath yet: the one of the last revision would mislead.
-      ...(swath && !preview ? drawSwath(swath, level, paint) : []),
+      ...(areas && !preview ? drawSwath(areas, level, paint) : []),
       ...drawCoast(lands, level, paint),
       ...lines,
-      ...(drawn && marks && !preview ? drawMarks(drawn, atlas, zoom, paint, `${paint.theme}-${marks.revision}-${[...hidden].join()}-${level}`) : []),
+      ...(drawn && !preview ? drawMarks(drawn, atlas, zoom, paint) : []),
     ];
-  }, [lands, meridians, paint, zones, winds, impact?.revision, swath, preview, drawn, marks, atlas, zoom, level, hidden]);
+  }, [lands, meridians, paint, zones, shown, areas, preview, drawn, atlas, zoom, level]);
 }
