@@ -1,6 +1,6 @@
 /** Who and what is in the way: layers, their readers, and places in typed arrays. */
 export * from './model';
-export type { ExposedZone, Exposure } from './exposure';
+export type { Exposure } from './exposure';
 export { cornersOf } from './corners';
 export { compileExposure } from './compileExposure';
 export { milli } from './milli';

@@ -1,4 +1,3 @@
-import type { Feature, FeatureCollection } from 'geojson';
 import { SURFACES } from '../units';
 import type { Surface } from '../units';
 
@@ -52,5 +51,3 @@ export interface RowError {
 }
 
 export type LayerReading = { ok: true; data: LayerData; accepted: number; rejected: RowError[] } | { ok: false; errors: RowError[] };
-
-export type { Feature, FeatureCollection };

@@ -1,6 +1,7 @@
 /** The sphere: distances, vectors, rings by quadrant, the antimeridian, and where land is. */
 export { cutAtAntimeridian } from './antimeridian';
 export { boundsOf } from './bounds';
+export type { Bounds } from './bounds';
 export { makeLandMask } from './landMask';
 export type { LandMask } from './landMask';
 export { quadrantRing } from './ring';

@@ -4,14 +4,7 @@ import { feature } from 'topojson-client';
 import type { Topology } from 'topojson-specification';
 import type { FeatureCollection, MultiPolygon, Polygon } from 'geojson';
 import { makeLandMask } from '../../lib/geo';
-import type { LandMask } from '../../lib/geo';
-
-export interface Bounds {
-  west: number;
-  south: number;
-  east: number;
-  north: number;
-}
+import type { Bounds, LandMask } from '../../lib/geo';
 
 const require = createRequire(import.meta.url);
 
@@ -47,21 +40,4 @@ export function landMask(coastFile: string | null, bounds: Bounds, cellKm: numbe
   if (masks.size >= MASKS_KEPT) masks.delete(masks.keys().next().value!);
   masks.set(key, mask);
   return mask;
-}
-
-/** Bounds of places with a margin in degrees, rounded outward to whole degrees so that masks are shared between runs. */
-export function boundsOf(lat: ArrayLike<number>, lon: ArrayLike<number>, marginDeg: number): Bounds {
-  let [west, south, east, north] = [Infinity, Infinity, -Infinity, -Infinity];
-  for (let i = 0; i < lat.length; i++) {
-    west = Math.min(west, lon[i]);
-    east = Math.max(east, lon[i]);
-    south = Math.min(south, lat[i]);
-    north = Math.max(north, lat[i]);
-  }
-  return {
-    west: Math.floor(west - marginDeg),
-    south: Math.max(-90, Math.floor(south - marginDeg)),
-    east: Math.ceil(east + marginDeg),
-    north: Math.min(90, Math.ceil(north + marginDeg)),
-  };
 }

@@ -1,5 +1,6 @@
 /** The compute thread's tasks. Plain functions: tests call them without a thread. */
 import { compileExposure, cornersOf, readLayer } from '../../lib/exposure';
+import { boundsOf } from '../../lib/geo';
 import { chanceOnGrid, forecastHazard, forecastPath, gridOver, gridPlaces, makeBlocks, memberHazard, memberPaths, nodeLeads, QUICKLY, reachBox, tabulateStorm, TILE_PLACES } from '../../lib/hazard';
 import type { MemberChunk, StormTable } from '../../lib/hazard';
 import { mergeChunks, tabulate } from '../../lib/impact';
@@ -11,7 +12,7 @@ import { surfaceOf } from '../../lib/wind';
 import { writeAssets } from './bulk';
 import { makeHandle, openHandle } from './exposureHandle';
 import type { ExposureHandle } from './exposureHandle';
-import { boundsOf, landMask } from './land';
+import { landMask } from './land';
 import { arrivalSwath, chanceSwath, peakSwath } from './swath';
 import { shareArrays, sharedBytes } from './shared';
 import type { AssembleAnswer, AssembleTask, ChunkTask, CompileTask, GridTask, InspectTask, Inspection, Sampled, SampleTask, TrackAnswer, TrackTask } from './tasks';
@@ -45,8 +46,9 @@ export function compile({ key, layers, coastFile }: CompileTask): ExposureHandle
     return { layerId: layer.id, data: reading.data };
   });
   const corners = read.flatMap(({ data }) => cornersOf(data));
-  if (corners.length === 0) return makeHandle(key, compileExposure(read, () => 'open'));
-  const mask = landMask(coastFile, boundsOf(corners.map(([, lat]) => lat), corners.map(([lon]) => lon), 1), LAND_CELL_KM);
+  const bounds = boundsOf(corners.map(([, lat]) => lat), corners.map(([lon]) => lon), 1);
+  if (!bounds) return makeHandle(key, compileExposure(read, () => 'open'));
+  const mask = landMask(coastFile, bounds, LAND_CELL_KM);
   return makeHandle(key, compileExposure(read, (lat, lon) => surfaceOf(mask.coastDistanceKm(lat, lon))));
 }
 
@@ -83,8 +85,8 @@ export function sample({ advisory, members: count, seed, exposure, coastFile }: 
   const storm = makeTrack(advisory);
   const leads = nodeLeads(storm, MEMBER_STEP_HOURS);
   const table = shareArrays(tabulateStorm(storm, leads));
-  const { lat, lon, count: places } = exposure.places;
-  const land = places > 0 ? landMask(coastFile, boundsOf(lat, lon, 6), SEA_CELL_KM) : null;
+  const bounds = boundsOf(exposure.places.lat, exposure.places.lon, 6);
+  const land = bounds && landMask(coastFile, bounds, SEA_CELL_KM);
   const paths = memberPaths(table, sampleMembers(storm, leads, { count, seed, model: PUBLISHED_ERRORS, land }), MEMBER_LIMIT_KT, sharedBytes);
   return { table, paths, grid: chanceGrid(paths) };
 }
