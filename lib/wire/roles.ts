@@ -14,3 +14,7 @@ export const newKeySchema = z.object({ name: z.string().trim().min(1).max(80), r
 export const keySchema = z.object({ id: z.string(), name: z.string(), role: roleSchema, start: z.string().nullable(), createdAt: z.string(), lastUsedAt: z.string().nullable() });
 /** `key` is shown once. */
 export const madeKeySchema = keySchema.extend({ key: z.string() });
+
+/** Someone who was given a one-time link. */
+export const personSchema = z.object({ id: z.string(), name: z.string(), role: roleSchema, everSignedIn: z.boolean(), createdAt: z.string() });
+export type Person = z.infer<typeof personSchema>;

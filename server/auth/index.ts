@@ -1,3 +1,3 @@
 /** Who is calling, and what they may do. */
 export { openAuth } from './openAuth';
-export type { KeyRecord, LeeboardAuth } from './model';
+export type { LeeboardAuth } from './model';

@@ -1,4 +1,4 @@
-import type { Role } from '../../lib/wire';
+import type { Person, Role } from '../../lib/wire';
 import type { Auth } from '../services';
 
 export interface KeyRecord {
@@ -22,6 +22,12 @@ export interface LeeboardAuth extends Auth {
   signOut(cookie: string | undefined): Promise<string>;
   /** Whether anyone has ever signed in. */
   everSignedIn(): Promise<boolean>;
+  /** Whoever was given a one-time link. */
+  people: {
+    list(): Promise<Person[]>;
+    /** Ends the person's sessions and links for good. False: no such person. */
+    remove(id: string): Promise<boolean>;
+  };
   keys: {
     list(): Promise<KeyRecord[]>;
     create(input: { name: string; role: Role }): Promise<KeyRecord & { key: string }>;

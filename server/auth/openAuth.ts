@@ -7,11 +7,11 @@ import { keyCache } from './keyCache';
 import { COOKIE_PREFIX, LINK_SECONDS, openLibrary } from './library';
 import type { AuthLibrary } from './library';
 import type { KeyRecord, LeeboardAuth } from './model';
+import { address, endSessionsOfFormer, peopleOf, PERSON } from './people';
 import { sessionSecret } from './secret';
 
-/** People of no mail: the library wants an address, and `.invalid` (RFC 2606) is nobody's. */
-const address = (name: string): string => `${name}@leeboard.invalid`;
 const KEEPER = address('keys');
+const BOOTSTRAP_ID = 'bootstrap';
 
 const digest = (text: string): Buffer => createHash('sha256').update(text).digest();
 
@@ -23,10 +23,14 @@ export async function openAuth(store: Pick<OpenedStore, 'shared'>, settings: Aut
   const library = await openLibrary(store.shared, sessionSecret(settings.DATA_DIR), origin, (ticket, token) => delivered.set(ticket, token));
   const { internalAdapter, adapter } = await library.$context;
   const keeperId = await keeper(library);
+  // Whoever came in by a bootstrap key goes when it is changed or taken away.
+  const bootstrapHolder = settings.BOOTSTRAP_KEY ? address(`key-${BOOTSTRAP_ID}-${digest(settings.BOOTSTRAP_KEY).toString('hex').slice(0, 16)}`) : null;
+  await endSessionsOfFormer(library, `key-${BOOTSTRAP_ID}-`, bootstrapHolder);
+  const holderOf = (keyId: string): string => (keyId === BOOTSTRAP_ID && bootstrapHolder) || address(`key-${keyId}`);
   const cache = keyCache(identifyStoredKey);
 
   async function identifyKey(key: string): Promise<Identity | null> {
-    if (settings.BOOTSTRAP_KEY && timingSafeEqual(digest(key), digest(settings.BOOTSTRAP_KEY))) return { id: 'bootstrap', name: 'bootstrap key', role: 'admin' };
+    if (settings.BOOTSTRAP_KEY && timingSafeEqual(digest(key), digest(settings.BOOTSTRAP_KEY))) return { id: BOOTSTRAP_ID, name: 'bootstrap key', role: 'admin' };
     return cache.get(key);
   }
 
@@ -64,13 +68,13 @@ export async function openAuth(store: Pick<OpenedStore, 'shared'>, settings: Aut
       return session ? { id: session.user.id, name: session.user.name, role: roleSchema.parse(session.user.role) } : null;
     },
     async createSignInLink({ name, role }) {
-      const token = await oneTimeToken(address(`person-${randomUUID()}`), name, role);
+      const token = await oneTimeToken(address(`${PERSON}${randomUUID()}`), name, role);
       return { url: `${origin}/sign-in?token=${token}`, expiresAt: new Date(Date.now() + LINK_SECONDS * 1000).toISOString() };
     },
     redeemSignIn,
     async signInWithKey(key) {
       const identity = await identifyKey(key);
-      return identity ? redeemSignIn(await oneTimeToken(address(`key-${identity.id}`), identity.name, identity.role)) : null;
+      return identity ? redeemSignIn(await oneTimeToken(holderOf(identity.id), identity.name, identity.role)) : null;
     },
     async signOut(cookie) {
       const answer = await library.api.signOut({ headers: new Headers(cookie ? { cookie } : {}), asResponse: true });
@@ -79,6 +83,7 @@ export async function openAuth(store: Pick<OpenedStore, 'shared'>, settings: Aut
     async everSignedIn() {
       return (await adapter.count({ model: 'user', where: [{ field: 'emailVerified', value: true }] })) > 0;
     },
+    people: await peopleOf(library),
     keys: {
       async list() {
         const rows = await adapter.findMany<StoredKey>({ model: 'apikey', sortBy: { field: 'createdAt', direction: 'desc' }, limit: 1000 });
@@ -93,7 +98,7 @@ export async function openAuth(store: Pick<OpenedStore, 'shared'>, settings: Aut
         if (!row) return false;
         await adapter.delete({ model: 'apikey', where: [{ field: 'id', value: id }] });
         cache.clear();
-        const holder = await internalAdapter.findUserByEmail(address(`key-${id}`));
+        const holder = await internalAdapter.findUserByEmail(holderOf(id));
         if (holder) await internalAdapter.deleteUserSessions(holder.user.id);
         return true;
       },

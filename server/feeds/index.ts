@@ -1,3 +1,3 @@
 /** Ways in for forecasts: whatever brings one, it goes through `acceptAdvisory`. */
 export { acceptAdvisory, readReceived } from './acceptAdvisory';
-export type { Accepted, HowToRead, Received } from './acceptAdvisory';
+export type { Accepted } from './acceptAdvisory';

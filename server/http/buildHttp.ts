@@ -24,6 +24,7 @@ import { impactRoutes } from './routes/impact';
 import { keyRoutes } from './routes/keys';
 import { layerRoutes } from './routes/layers';
 import { logRoutes } from './routes/log';
+import { peopleRoutes } from './routes/people';
 import { sessionRoutes } from './routes/session';
 
 /** A thousand screens behind one address, each fetching a handful at a new revision, stay well below. */
@@ -67,6 +68,7 @@ async function apiRoutes(api: Api, services: HttpServices): Promise<void> {
   healthRoutes(api, services);
   sessionRoutes(api, services);
   keyRoutes(api, services);
+  peopleRoutes(api, services);
   eventRoutes(api, services);
   logRoutes(api, services);
   impactRoutes(api, services, assetsOf);

@@ -1,3 +1,3 @@
 /** The HTTP API: every route, who may call it, and how it refuses. */
 export { buildHttp } from './buildHttp';
-export type { Demo, HttpServices } from './httpServices';
+export type { HttpServices } from './httpServices';

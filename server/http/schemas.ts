@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { advisorySchema } from '../../lib/advisory';
 import { assetRowSchema, impactSchema, zoneRowSchema } from '../../lib/impact';
-import { dryRunSchema, eventSchema, identitySchema, issuedSchema, keySchema, layerSchema, layerStoredSchema, listOf, logEntrySchema, madeKeySchema, problemSchema, storedAdvisorySchema } from '../../lib/wire';
+import { dryRunSchema, eventSchema, identitySchema, issuedSchema, keySchema, layerSchema, layerStoredSchema, listOf, logEntrySchema, madeKeySchema, personSchema, problemSchema, storedAdvisorySchema } from '../../lib/wire';
 
 /** Names of the parts in the API's description. */
 export const named = z.registry<{ id: string }>();
@@ -20,6 +20,7 @@ for (const [id, schema] of Object.entries({
   Key: keySchema,
   MadeKey: madeKeySchema,
   Identity: identitySchema,
+  Person: personSchema,
   Problem: problemSchema,
 })) {
   named.add(schema, { id });

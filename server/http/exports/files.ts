@@ -7,7 +7,7 @@ import type { Column } from './columns';
 import { headingOf } from './heading';
 import type { Exported } from './heading';
 
-const ROWS_A_TURN = 500;
+const ROWS_A_TURN = 250;
 
 /** Heading, column heads, rows; made a few hundred rows at a time, so that others have their turn. */
 async function* table<Row>(exported: Exported, columns: readonly Column<Row>[], count: number, rowAt: (index: number) => Row): AsyncGenerator<string> {

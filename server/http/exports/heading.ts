@@ -16,16 +16,17 @@ const CAUTION = 'Planning aid. Official forecasts and warnings and local authori
 
 const hours = (ms: number): string => `${(ms / 3_600_000).toFixed(1)} h`;
 
-/** What every export says about itself, a line each. */
+/** What every export says about itself, a line each. No commas: a spreadsheet would part the line. */
 export function headingOf({ event, impact, advisory, now, version }: Exported): string[] {
   const { storm, number, centre, issuedAt } = advisory;
   return [
     ...(event.exercise ? ['EXERCISE EXERCISE EXERCISE: not a real storm'] : []),
     CAUTION,
     `Event: ${event.name}`,
-    `Storm: ${storm.name}${storm.id ? ` (${storm.id})` : ''}. Advisory ${number} of ${centre}, issued ${issuedAt}, ${hours(Date.parse(now) - Date.parse(issuedAt))} before this file was made at ${now} (the event's clock)`,
-    `Revision ${impact.revision}: ${impact.stage === 'members' ? `${impact.members} members` : 'forecast track only, members not computed yet'}, computed ${impact.computedAt}`,
-    'Winds: 1-minute sustained knots at 10 m over the place\'s own surface. Times: UTC. Empty: does not come, not known, or not computed',
+    `Storm: ${storm.name}${storm.id ? ` (${storm.id})` : ''}. Advisory ${number} of ${centre} issued at ${issuedAt}`,
+    `Made at ${now} by the clock of the event: ${hours(Date.parse(now) - Date.parse(issuedAt))} after the advisory was issued`,
+    `Revision ${impact.revision}: ${impact.stage === 'members' ? `${impact.members} members` : 'forecast track only (members not computed yet)'}. Computed at ${impact.computedAt}`,
+    "Winds: 1-minute sustained knots at 10 m over the place's own surface. Times: UTC. Empty: does not come or not known or not computed",
     `Leeboard ${version}`,
   ];
 }

@@ -5,8 +5,6 @@ import type { Api, HttpServices } from '../httpServices';
 import { Refusal } from '../problems';
 import { answers, listAnswer, pageQuery, refusals } from '../schemas';
 
-const linkSchema = z.object({ url: z.string(), expiresAt: z.iso.datetime() });
-
 export function keyRoutes(app: Api, { auth }: HttpServices): void {
   app.get('/keys', { config: { access: 'admin' }, schema: { summary: 'Keys, newest first, without themselves', querystring: pageQuery, response: listAnswer(keySchema) } }, async ({ query: { offset, limit } }) => {
     const keys = await auth.keys.list();
@@ -23,11 +21,5 @@ export function keyRoutes(app: Api, { auth }: HttpServices): void {
     if (!(await auth.keys.revoke(request.params.keyId))) throw new Refusal('not-found', 'There is no such key; it may have been revoked before.');
     request.log.info({ key: request.params.keyId, by: callerOf(request).name }, 'key revoked');
     return reply.code(204).send();
-  });
-
-  app.post('/sign-in-links', { config: { access: 'admin' }, schema: { summary: 'Make a link that signs one person in, once', body: newKeySchema, response: answers(201, linkSchema) } }, async (request, reply) => {
-    const link = await auth.createSignInLink(request.body);
-    request.log.info({ name: request.body.name, role: request.body.role, by: callerOf(request).name }, 'sign-in link made');
-    return reply.code(201).header('cache-control', 'no-store').send(link);
   });
 }

@@ -109,6 +109,22 @@ describe.each(ENGINES)('on %s', (_, open) => {
     expect(await again.identifyKey(BOOTSTRAP)).toBeNull();
   });
 
+  test('whoever came in by a bootstrap key goes when it is changed or taken away', async () => {
+    const { setCookie } = (await auth.signInWithKey(BOOTSTRAP))!;
+    const cookie = cookieOf(setCookie);
+    expect(await auth.identify({ cookie })).toMatchObject({ role: 'admin' });
+    const same = await openAuth(opened.store, { DATA_DIR: folder, BOOTSTRAP_KEY: BOOTSTRAP }, ORIGIN);
+    expect(await same.identify({ cookie })).toMatchObject({ role: 'admin' });
+    const changed = await openAuth(opened.store, { DATA_DIR: folder, BOOTSTRAP_KEY: `${BOOTSTRAP}-changed` }, ORIGIN);
+    expect(await changed.identify({ cookie })).toBeNull();
+  });
+
+  test('keepers of keys are no people, and cannot be removed as such', async () => {
+    await auth.signInWithKey((await auth.keys.create({ name: 'wall', role: 'viewer' })).key);
+    expect((await auth.people.list()).map(({ name }) => name)).not.toContain('wall');
+    expect(await auth.people.remove('nobody')).toBe(false);
+  });
+
   test('people sign in while the store writes: neither waits for a lock of the other', async () => {
     const eventId = randomUUID();
     await opened.store.events.add({ id: eventId, name: 'Quillon', timeZone: 'UTC', exercise: false, demo: false, clock: null, createdAt: '2031-09-19T09:00:00.000Z' });

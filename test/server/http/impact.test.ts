@@ -145,7 +145,8 @@ describe('exports', () => {
     const head = comments((await get(`/exports/${name}?revision=1`)).body).join('\n');
     expect(head).toMatch(/EXERCISE/);
     expect(head).toMatch(/Official forecasts and warnings and local authorities come first/);
-    expect(head).toMatch(/Advisory 5 of Test centre\u00b7 issued 2031-09-19T09:00:00Z\u00b7 2\.0 h before/);
+    expect(head).toMatch(/Advisory 5 of Test centre issued at 2031-09-19T09:00:00Z/);
+    expect(head).toMatch(/Made at 2031-09-19T11:00:00\.000Z by the clock of the event: 2\.0 h after/);
     expect(head).toMatch(/Revision 1: forecast track only/);
     for (const line of head.split('\n')) expect(line, 'one cell in every spreadsheet').not.toMatch(/[",;\t]/);
   });

@@ -26,7 +26,7 @@ afterAll(() => world.close());
 
 test("the description is valid by the OpenAPI Initiative's own schema for 3.1", async () => {
   const validator = new Validator();
-  expect(await validator.validate(JSON.stringify(api))).toMatchObject({ valid: true });
+  expect(await validator.validate({ ...structuredClone(api) })).toMatchObject({ valid: true });
   expect(validator.version).toBe('3.1');
   expect(api.openapi).toBe('3.1.0');
 });

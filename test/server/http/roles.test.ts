@@ -36,6 +36,8 @@ const CONTRACT: Record<string, string> = {
   'POST /api/v1/keys': 'admin',
   'DELETE /api/v1/keys/:keyId': 'admin',
   'POST /api/v1/sign-in-links': 'admin',
+  'GET /api/v1/people': 'admin',
+  'DELETE /api/v1/people/:personId': 'admin',
 };
 
 let world: World;

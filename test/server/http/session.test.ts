@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import type { Person } from '../../../lib/wire';
 import { BOOTSTRAP, httpWorld, problemOf } from './world';
 import type { World } from './world';
 
@@ -35,6 +36,18 @@ describe('a one-time link', () => {
     expect(String(out.headers['set-cookie'])).toContain('Max-Age=0');
     expect((await world.call({ url: '/api/v1/me', as: null, headers: { cookie } })).statusCode).toBe(401);
   });
+});
+
+test('a person is removed with their session and with a link not used yet', async () => {
+  const used = await link();
+  const cookie = String((await signIn({ token: tokenOf(used.url) })).headers['set-cookie']).split(';')[0];
+  const unused = await link();
+  const people = (await world.call({ url: '/api/v1/people' })).json<{ items: Person[] }>().items.slice(0, 2);
+  expect(people.map(({ name, role, everSignedIn }) => ({ name, role, everSignedIn }))).toEqual(expect.arrayContaining([{ name: 'Mara', role: 'operator', everSignedIn: true }, { name: 'Mara', role: 'operator', everSignedIn: false }]));
+  for (const { id } of people) expect((await world.call({ method: 'DELETE', url: `/api/v1/people/${id}` })).statusCode).toBe(204);
+  expect((await world.call({ url: '/api/v1/me', as: null, headers: { cookie } })).statusCode).toBe(401);
+  expect((await signIn({ token: tokenOf(unused.url) })).statusCode).toBe(401);
+  expect((await world.call({ method: 'DELETE', url: `/api/v1/people/${people[0].id}` })).statusCode).toBe(404);
 });
 
 describe('a key', () => {

@@ -59,8 +59,7 @@ test.each([1, 2, 7, 20, 41])('killed after %i answers, every advisory that was a
     const impact = (await store.impacts.get(EVENT_ID, revision))!;
     expect(await store.impacts.current(EVENT_ID)).toEqual(impact);
     expect((await store.impacts.bulk(EVENT_ID, revision, 'assets'))?.length).toBe(200_000);
-    const { revision: _, ...again } = impact;
-    expect((await store.impacts.publish({ impact: again, bulk: { assets: Buffer.alloc(200_000) } })).revision).toBe(revision + 1);
+    expect((await store.impacts.publish({ impact, bulk: { assets: Buffer.alloc(200_000) } })).revision).toBe(revision + 1);
   }
   expect(await store.impacts.get(EVENT_ID, revision + 2)).toBeNull();
   await store.close();
