@@ -44,7 +44,7 @@ export async function startServer({ env, dir, development }: StartOptions): Prom
     const store = await openStore(settings);
     stops.push(() => store.close());
     const auth = await openAuth(store, settings, origin);
-    const bus = makeBus();
+    const bus = makeBus((err) => logger.error({ err }, 'a listener failed'));
     const clock = { nowMs: () => Date.now() };
     const scenario = readScenario(join(dir, 'public', 'demo'));
     const pool = openPool();

@@ -5,7 +5,8 @@ import { magicLink } from 'better-auth/plugins/magic-link';
 import type { SharedDatabase } from '../store';
 
 const DAY_SECONDS = 24 * 3600;
-const SESSION_DAYS = 30;
+/** A storm season: a screen on the wall is not to ask for a new link in the midst of one. */
+const SESSION_DAYS = 180;
 export const COOKIE_PREFIX = 'leeboard';
 
 /**
