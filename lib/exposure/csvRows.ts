@@ -4,36 +4,38 @@ import type { RowError } from './model';
 
 export type CsvRows = { ok: true; columns: string[]; rows: Row[] } | { ok: false; errors: RowError[] };
 
-interface Line {
-  row: number;
-  cells: string[];
-}
-
 /**
  * Rows of a CSV (RFC 4180) whose first row names the columns, numbered as a spreadsheet numbers them. The separator is a comma,
  * a semicolon or a tab, told from the header; empty rows are passed over.
  */
 export function csvRows(text: string): CsvRows {
-  const lines = linesOf(text);
-  if (!Array.isArray(lines)) return { ok: false, errors: [lines] };
-  const [header, ...body] = lines;
-  if (!header) return { ok: false, errors: [{ row: 1, message: 'the file is empty' }] };
-  if (body.length === 0) return { ok: false, errors: [{ row: header.row, message: 'the file has one row: the first names the columns, and the rows below it hold the values' }] };
-  // Spreadsheets leave separators behind where columns were emptied.
-  const width = header.cells.reduce((last, name, i) => (name === '' ? last : i + 1), 0);
-  const columns = header.cells.slice(0, width);
-  const errors: RowError[] = namesFaults(columns).map((message) => ({ row: header.row, message }));
-  const rows = body.map(({ row, cells }): Row => {
+  let columns: string[] | null = null;
+  const rows: Row[] = [];
+  const errors: RowError[] = [];
+  const take = (row: number, cells: readonly string[]): void => {
+    if (!columns) {
+      // Spreadsheets leave separators behind where columns were emptied.
+      columns = cells.slice(0, cells.reduce((last, name, i) => (name === '' ? last : i + 1), 0));
+      errors.push(...namesFaults(columns).map((message) => ({ row, message })));
+      return;
+    }
+    const width = columns.length;
     if (cells.length < width || cells.slice(width).some((cell) => cell !== '')) {
       errors.push({ row, message: `found ${cells.length} values, the header names ${width} columns: put values that hold the separator in quotes, and leave none out` });
+    } else {
+      rows.push({ row, values: Object.fromEntries(columns.map((name, i) => [name, cells[i]])) });
     }
-    return { row, values: Object.fromEntries(columns.map((name, i) => [name, cells[i] ?? ''])) };
-  });
-  return errors.length > 0 ? { ok: false, errors } : { ok: true, columns, rows };
+  };
+  const fault = eachRow(text, take);
+  if (fault) errors.push(fault);
+  if (errors.length > 0) return { ok: false, errors };
+  if (!columns) return { ok: false, errors: [{ row: 1, message: 'the file is empty' }] };
+  if (rows.length === 0) return { ok: false, errors: [{ row: 1, message: 'the file has one row: the first names the columns, and the rows below it hold the values' }] };
+  return { ok: true, columns, rows };
 }
 
-function linesOf(text: string): Line[] | RowError {
-  const lines: Line[] = [];
+/** Hands over each row that is not empty; the fault that ends the reading early, or null. */
+function eachRow(text: string, take: (row: number, cells: string[]) => void): RowError | null {
   try {
     parse(text, {
       bom: true,
@@ -42,11 +44,11 @@ function linesOf(text: string): Line[] | RowError {
       skip_empty_lines: true,
       trim: true,
       on_record: (cells: string[], { records, empty_lines }) => {
-        if (cells.some((cell) => cell !== '')) lines.push({ row: records + empty_lines, cells });
+        if (cells.some((cell) => cell !== '')) take(records + empty_lines, cells);
         return null;
       },
     });
-    return lines;
+    return null;
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     const { records = 0, empty_lines = 0 } = error as { records?: number; empty_lines?: number };
