@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import { expect, test } from '@playwright/test';
 import type { Page } from '@playwright/test';
-import { openDemo, revisionOf, signIn, watchRevisions } from './screens';
+import { openDemo, revisionOf, settled, signIn, watchRevisions } from './screens';
 
 test.describe.configure({ mode: 'serial' });
 
@@ -97,6 +97,7 @@ test('two screens show the same revision within a second of each other', async (
   const [first, second] = [await one.newPage(), await two.newPage()];
   await openDemo(first);
   await openDemo(second);
+  await Promise.all([settled(first), settled(second)]);
   await Promise.all([watchRevisions(first), watchRevisions(second)]);
   await nextAdvisory(first);
   const revision = await revisionOf(first);

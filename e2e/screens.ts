@@ -51,3 +51,24 @@ export async function watchRevisions(page: Page): Promise<void> {
     }).observe(link, { attributes: true, attributeFilter: ['data-revision'] });
   });
 }
+
+/** A screen that stands, as those in a room do: map drawn, nothing being fetched, the page at rest for half a second. */
+export async function settled(page: Page): Promise<void> {
+  await expect(page.getByRole('application')).toHaveAttribute('data-drawing', 'ready');
+  await page.waitForLoadState('networkidle');
+  await page.evaluate(
+    () =>
+      new Promise<void>((resolve) => {
+        let restingMs = 0;
+        let before = performance.now();
+        const look = (): void => {
+          const now = performance.now();
+          restingMs = now - before < 120 ? restingMs + (now - before) : 0;
+          before = now;
+          if (restingMs > 500) resolve();
+          else setTimeout(look, 50);
+        };
+        look();
+      }),
+  );
+}
