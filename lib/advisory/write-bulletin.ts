@@ -20,6 +20,9 @@ const REMARKS: Record<Stage, string> = {
   dissipated: 'DISSIPATED',
 };
 
+/** Stages that the product repeats at every point they hold for. */
+const SAID_EACH_TIME: readonly Stage[] = ['post-tropical', 'remnant-low'];
+
 /**
  * Writes an advisory in the layout of the public forecast/advisory text product.
  *
@@ -92,7 +95,7 @@ function located({ averaging, points }: Advisory, first: Point): string[] {
 }
 
 function forecast(label: string, point: Point, before: Stage | undefined): string[] {
-  const said = point.stage !== undefined && point.stage !== carriedStage(before, '', point.maxWindKt);
+  const said = point.stage !== undefined && (SAID_EACH_TIME.includes(point.stage) || point.stage !== carriedStage(before, '', point.maxWindKt));
   const gust = point.gustKt === undefined ? '' : `...GUSTS ${three(point.gustKt)} KT`;
   return [
     `${label} VALID ${dayTime(point.validAt)} ${position(point)}${said ? `...${REMARKS[point.stage!]}` : ''}`,

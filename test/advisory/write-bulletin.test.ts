@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import fc from 'fast-check';
 import { STAGES, writeBulletin } from '../../lib/advisory';
 import { carriedStage } from '../../lib/advisory/stage';
-import { advisory, codes, expectedOf, namesIn, point, read } from './fixtures';
+import { advisory, codes, expectedOf, namesIn, point, read, textOf } from './fixtures';
 import type { Advisory, Point, QuadrantRadii, Stage } from '../../lib/advisory';
 
 describe('the layout is that of the public product', () => {
@@ -180,3 +180,10 @@ const carriable: fc.Arbitrary<Advisory> = fc
   });
 
 const instant = (hour: number): string => `${new Date(hour * 3_600_000).toISOString().slice(0, 19)}Z`;
+
+test('points after transition say so one by one, on the lines where a published bulletin does', () => {
+  const published = textOf('bulletins', 'al102017.fstadv.004');
+  const labels = (text: string): string[] => text.split(/\r?\n/).filter((line) => /VALID .*POST-TROP\/EXTRATROP/.test(line)).map((line) => line.slice(0, line.indexOf('.')));
+  expect(labels(published)).toHaveLength(4);
+  expect(labels(writeBulletin(read(published).advisory))).toEqual(labels(published));
+});
