@@ -27,7 +27,6 @@ export const fetchEvents = async (signal?: AbortSignal): Promise<Event[]> => (aw
 export const fetchEvent = (eventId: string, signal?: AbortSignal): Promise<Event> => getJson(event(eventId), signal);
 export const fetchAdvisories = async (eventId: string, signal?: AbortSignal): Promise<StoredAdvisory[]> =>
   (await getJson<Listed<StoredAdvisory>>(`${event(eventId)}/advisories${query({ limit: 200 })}`, signal)).items;
-export const fetchAdvisory = (eventId: string, advisoryId: string): Promise<StoredAdvisory> => getJson(`${event(eventId)}/advisories/${encodeURIComponent(advisoryId)}`);
 export const fetchSwath = (eventId: string, revision: number, product: Product, signal?: AbortSignal): Promise<FeatureCollection> =>
   getJson(`${event(eventId)}/swath${query({ revision, product })}`, signal);
 export const fetchMarks = (eventId: string, revision: number, signal?: AbortSignal): Promise<Marks> => getJson(`${event(eventId)}/impact/marks${query({ revision })}`, signal);

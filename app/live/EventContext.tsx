@@ -12,6 +12,7 @@ import { eventMsAt } from './clock';
 import { makeLiveEvent } from './connect';
 import type { LiveEvent } from './connect';
 import { followRevisions } from './follow';
+import { followAssets } from './followAssets';
 import type { EventState } from './state';
 import { tickStore } from './tick';
 import { createView } from './view';
@@ -30,11 +31,8 @@ export function EventProvider({ eventId, children }: { eventId: string; children
   const [hold] = useState<Hold>(() => ({ live: makeLiveEvent(eventId), bulk: createBulk(), view: createView() }));
   useEffect(() => {
     const close = hold.live.open();
-    const stop = followRevisions(hold.live, hold.bulk, hold.view);
-    return () => {
-      stop();
-      close();
-    };
+    const stops = [followRevisions(hold.live, hold.bulk, hold.view), followAssets(hold.live, hold.bulk, hold.view), close];
+    return () => stops.forEach((stop) => stop());
   }, [hold]);
   return <HoldContext value={hold}>{children}</HoldContext>;
 }

@@ -1,5 +1,6 @@
 import { createStore } from 'zustand/vanilla';
 import type { StoreApi } from 'zustand/vanilla';
+import type { AssetRow } from '../../lib/impact';
 import type { Layer, StoredAdvisory } from '../../lib/wire';
 import type { Marks } from '../http/api';
 import type { Polygon } from '../map/shapes';
@@ -29,6 +30,8 @@ export interface Swath {
 export interface Bulk {
   swath: Swath | null;
   marks: Marks | null;
+  /** Whole rows of the classes that were pointed at, by asset id; of one revision. */
+  assets: { revision: number; byClass: Readonly<Record<string, Readonly<Record<string, AssetRow>>>> };
   layers: Layer[];
   zones: ZoneShape[];
   /** Oldest first. */
@@ -37,4 +40,4 @@ export interface Bulk {
   trouble: string | null;
 }
 
-export const createBulk = (): StoreApi<Bulk> => createStore<Bulk>(() => ({ swath: null, marks: null, layers: [], zones: [], history: [], trouble: null }));
+export const createBulk = (): StoreApi<Bulk> => createStore<Bulk>(() => ({ swath: null, marks: null, assets: { revision: 0, byClass: {} }, layers: [], zones: [], history: [], trouble: null }));

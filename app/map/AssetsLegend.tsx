@@ -10,7 +10,7 @@ import styles from './Map.module.css';
 /** The classes of assets, folded where the map is small. */
 export function AssetsLegend() {
   const count = useBulk((state) => state.marks?.id.length ?? 0);
-  const [open, setOpen] = useState(() => window.matchMedia('(min-height: 851px) and (min-width: 1440px)').matches);
+  const [open, setOpen] = useState(() => window.matchMedia('(min-height: 851px) and (min-width: 1600px)').matches);
   if (count === 0) return null;
   return (
     <div>

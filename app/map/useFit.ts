@@ -21,7 +21,7 @@ export function useFit(map: StoreApi<MapState>): () => void {
     if (size.width === 0) return;
     const points = (preview ?? advisory)?.points.map((point) => [point.lon, point.lat] as const) ?? [];
     const places = zones.length > 0 ? zones.flatMap((zone) => zone.polygons.flatMap((polygon) => polygon[0] as [number, number][])) : (marks?.lon.map((lon, i) => [lon, marks.lat[i]] as const) ?? []);
-    const bounds = preview ? boundsOf([...points, ...places.slice(0, 1)]) : (withStorm(boundsOf(places), points[0]) ?? boundsOf(points));
+    const bounds = preview ? boundsOf(points) : (withStorm(boundsOf(places), points[0]) ?? boundsOf(points));
     if (!bounds) return;
     const camera = fitted(bounds, size, PADDING, 8);
     const { camera: held } = map.getState();

@@ -28,6 +28,11 @@ function Frame({ eventId, children }: { eventId: string; children: ReactNode }) 
   const exercise = useLive((state) => state.event?.exercise ?? false);
   return (
     <div className={styles.frame} data-tab={tab} data-exercise={exercise}>
+      {tab === 'board' && (
+        <a className={styles.skip} href="#zones">
+          {words.common.skip}
+        </a>
+      )}
       {exercise && <div className={styles.band} role="img" aria-label={words.exerciseBand} />}
       <Header eventId={eventId} tab={tab} />
       <main className={styles.stage}>

@@ -34,7 +34,6 @@ export const en = {
     noRevision: 'nothing computed yet',
     screens: (count: number) => (count === 1 ? '1 screen' : `${count} screens`),
     since: (clock: string) => `line lost at ${clock}; trying again`,
-    retrying: 'figures may be overtaken; trying again',
   },
   run: {
     members: (done: string, of: string) => `Members computing: ${done} of ${of}`,
@@ -110,8 +109,7 @@ export const en = {
     fit: 'Fit',
     now: 'Now',
     legend: {
-      peak: (until: string) => `Greatest sustained wind, now to ${until}`,
-      peakAll: 'Greatest sustained wind',
+      peak: (until: string) => `Greatest sustained wind, forecast to ${until}`,
       chance: (wind: string) => `Chance of ${wind} or more`,
       preview: 'Preview: not issued',
       note: (averaging: string, number: string, revision: number, members: string) => `1-minute mean at 10 m over open water or coast${averaging}. Advisory ${number}, revision ${revision}, ${members}.`,
@@ -264,7 +262,7 @@ export const en = {
   signIn: {
     title: 'Sign in',
     lead: 'Open the one-time link, or give a key.',
-    where: 'The link is printed in the window in which Leeboard was started, on the line that begins with “Sign in”. It works once. An admin makes further links and keys under Settings.',
+    where: 'The link is printed in the window in which Leeboard was started, on the line that begins with “Leeboard is at”. It works once. An admin makes further links and keys under Settings.',
     key: 'Key or one-time link',
     send: 'Sign in',
     sending: 'Signing in',
@@ -288,6 +286,5 @@ export const en = {
     notFound: 'There is nothing here.',
     home: 'To the events',
     skip: 'Skip to the zones',
-    optional: 'optional',
   },
 } as const;
