@@ -1,11 +1,11 @@
 import { gzipSync } from 'node:zlib';
-import { startServerProcess } from './serverProcess';
+import { newDataDir, removeDataDir, startServerProcess } from '../server/serverProcess';
 import { row } from './report';
 import type { Row } from './report';
 
 /** JavaScript that the Board's page asks for, as sent (gzip) and as run. */
 export async function benchBoard(): Promise<Row[]> {
-  const server = await startServerProcess();
+  const server = await startServerProcess(newDataDir());
   try {
     const html = await (await server.get('/')).text();
     const scripts = [...new Set([...html.matchAll(/\/_next\/static\/[^"'\\ ]+\.js/g)].map(([path]) => path))];
@@ -18,6 +18,7 @@ export async function benchBoard(): Promise<Row[]> {
     }
     return [row(`JavaScript named by the page, ${scripts.length} files, run`, raw / 1000, 'kB'), row('JavaScript named by the page, gzip', sent / 1000, 'kB')];
   } finally {
-    await server.stop();
+    await server.end('SIGINT');
+    removeDataDir(server.dataDir);
   }
 }

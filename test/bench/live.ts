@@ -1,7 +1,7 @@
 import { io } from 'socket.io-client';
 import type { Advisory } from '../../lib/advisory';
 import type { ImpactNotice } from '../../lib/wire';
-import { startServerProcess } from './serverProcess';
+import { newDataDir, removeDataDir, startServerProcess } from '../server/serverProcess';
 import { median, row } from './report';
 import type { Row } from './report';
 
@@ -54,7 +54,7 @@ async function metric(text: string, name: string): Promise<number> {
 
 /** From POST to the second screen, on the demo, with the server in a process of its own. */
 export async function benchLive(): Promise<Row[]> {
-  const server = await startServerProcess();
+  const server = await startServerProcess(newDataDir());
   try {
     const events = (await (await server.get('/api/v1/events')).json()) as { items: { id: string; advisoryId: string }[] };
     const [event] = events.items;
@@ -90,6 +90,7 @@ export async function benchLive(): Promise<Row[]> {
       row('impact message', bytes / 1000, 'kB'),
     ];
   } finally {
-    await server.stop();
+    await server.end('SIGINT');
+    removeDataDir(server.dataDir);
   }
 }
