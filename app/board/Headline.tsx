@@ -10,11 +10,12 @@ export function Headline({ impact, children }: { impact: Impact | null; children
   const view = impact && headline(impact);
   return (
     <section className={styles.headline} aria-label={words.headline.title}>
-      {children}
-      {!view && <p className="dim">{words.headline.empty}</p>}
+      <div className={styles.top}>
+        {view ? <h2 className={styles.title}>{words.headline.title}</h2> : <p className="dim">{words.headline.empty}</p>}
+        {children}
+      </div>
       {view && (
         <>
-          <h2 className={styles.title}>{words.headline.title}</h2>
           <dl className={styles.counts}>
             {view.counts.map((count) => (
               <div key={count.threshold} className={styles.count} data-band={count.threshold}>

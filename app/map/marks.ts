@@ -37,6 +37,18 @@ export function markClasses(marks: Marks): MarkClass[] {
     .sort((a, b) => a.count - b.count || a.name.localeCompare(b.name));
 }
 
+const crowded = new WeakMap<Marks, ReadonlySet<number>>();
+
+/** Indices of the classes that are drawn as dots. */
+export function dotClasses(marks: Marks): ReadonlySet<number> {
+  let found = crowded.get(marks);
+  if (!found) {
+    found = new Set(markClasses(marks).filter((one) => one.glyph === 'dot').map((one) => marks.classes.indexOf(one.name)));
+    crowded.set(marks, found);
+  }
+  return found;
+}
+
 export interface MarkColumns {
   /** Index of each drawn mark in `Marks`. */
   index: Uint32Array;

@@ -38,8 +38,8 @@ export const en = {
   run: {
     members: (done: string, of: string) => `Members computing: ${done} of ${of}`,
     starting: 'Members computing',
-    track: (number: string) => `Advisory ${number} is being computed; the figures below are the advisory before`,
-    first: (number: string) => `Advisory ${number} is being computed`,
+    track: (number: string) => `Advisory ${number} computing; figures of the one before`,
+    first: (number: string) => `Advisory ${number} computing`,
     failed: (message: string) => `The last computation failed: ${message}. The figures are those of the revision before.`,
   },
   announce: (number: string, revision: number, people: string) => `Advisory ${number}, revision ${revision}: ${people} people at 34 knots or more.`,

@@ -45,6 +45,13 @@ describe('pointing', () => {
     expect(markAt(marks, new Set(), camera, -48.4, 25.2, 9)).toBeNull();
   });
 
+  test('finds a hospital among thousands of dots', () => {
+    const many = 3000;
+    const crowd: Marks = { id: Array.from({ length: many + 1 }, (_, i) => String(i)), lon: Array.from({ length: many + 1 }, () => -48.5), lat: Array.from({ length: many + 1 }, (_, i) => (i === 0 ? 25.01 : 25)), classes: marks.classes, classIndex: [0, ...Array.from({ length: many }, () => 1)], maxWindKt: Array.from({ length: many + 1 }, () => 40) };
+    expect(markAt(crowd, new Set(), camera, -48.5, 25, 9)).toBe(0);
+    expect(markAt(crowd, new Set(['hospital']), camera, -48.5, 25, 9)).toBeGreaterThan(0);
+  });
+
   test('finds marks beyond the 180th meridian', () => {
     const far: Marks = { ...marks, lon: [179.999, 0, 0] };
     expect(markAt(far, new Set(), { ...camera, lon: -179.999 }, -179.9995, 25, 9)).toBe(0);
