@@ -27,12 +27,16 @@ export type Accepted =
 
 type Needed = Pick<Services, 'store' | 'bus' | 'runs' | 'clock'>;
 
-/** Reads and checks a file as it was received, against the event's clock and the advisory before it. Stores nothing. */
+/**
+ * Reads and checks a file as it was received, against the event's clock and the advisory before it. Stores nothing. An exercise
+ * without a clock gets its own from this advisory, so there is no now yet to hold it against.
+ */
 export async function readReceived({ store, clock }: Pick<Needed, 'store' | 'clock'>, { event, source, how = {} }: Pick<Received, 'event' | 'source' | 'how'>): Promise<Reading> {
   const decoded = decodeText(source.bytes);
   if (!decoded.ok) return { ok: false, format: how.format ?? null, errors: [{ message: decoded.message }] };
   const previous = await store.advisories.latest(event.id);
-  return readAdvisory(decoded.text, { ...how, nowMs: eventNowMs(event.clock, clock.nowMs()), ...(previous ? { previous } : {}) });
+  const now = event.exercise && event.clock === null ? {} : { nowMs: eventNowMs(event.clock, clock.nowMs()) };
+  return readAdvisory(decoded.text, { ...how, ...now, ...(previous ? { previous } : {}) });
 }
 
 /**

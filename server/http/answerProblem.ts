@@ -1,7 +1,6 @@
 import type { FastifyError, FastifyReply, FastifyRequest } from 'fastify';
 import { hasZodFastifySchemaValidationErrors } from 'fastify-type-provider-zod';
-import type { Problem } from '../../lib/wire';
-import { Refusal, REFUSALS } from './problems';
+import { problemDocument, Refusal } from './problems';
 import type { RefusalCode } from './problems';
 
 const megabytes = (bytes: number): string => `${Math.round(bytes / 1024 / 1024)} MB`;
@@ -13,16 +12,8 @@ export function answerProblem(error: FastifyError | Refusal | Error, request: Fa
   // Hanging up on a client that is still sending loses it the answer: what it sends is read and dropped instead.
   if (refusal.code === 'too-large') void reply.removeHeader('connection');
   if (refusal.code === 'unauthorized') void reply.header('www-authenticate', 'Bearer');
-  const [status, title] = REFUSALS[refusal.code];
-  const problem: Problem = {
-    type: `urn:leeboard:problem:${refusal.code}`,
-    title,
-    status,
-    detail: refusal.detail,
-    instance: `urn:uuid:${request.id}`,
-    ...(refusal.errors.length > 0 ? { errors: [...refusal.errors] } : {}),
-  };
-  return reply.code(status).header('cache-control', 'no-store').type('application/problem+json').send(problem);
+  const problem = problemDocument(refusal, request.id);
+  return reply.code(problem.status).header('cache-control', 'no-store').type('application/problem+json').send(problem);
 }
 
 function refusalOf(error: FastifyError | Refusal | Error, request: FastifyRequest): Refusal {

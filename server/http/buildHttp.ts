@@ -7,6 +7,7 @@ import type { FastifyBaseLogger, FastifyInstance } from 'fastify';
 import { serializerCompiler, validatorCompiler } from 'fastify-type-provider-zod';
 import type { ZodTypeProvider } from 'fastify-type-provider-zod';
 import { guardAccess } from './access';
+import { answerGarbled } from './answerGarbled';
 import { answerProblem } from './answerProblem';
 import { assetReader } from './assetsOf';
 import { describeApi } from './describeApi';
@@ -33,7 +34,7 @@ const SLOWEST_REQUEST_MS = 300_000;
 const JSON_BYTES = 1024 * 1024;
 
 /**
- * The HTTP server with everything under `/api/v1` and `/metrics`. It does not listen, and knows no pages: whoever starts it sets
+ * The HTTP server with everything under `/api` and `/metrics`. It does not listen, and knows no pages: whoever starts it sets
  * the not-found handler that shows them. `development` allows what page reload needs.
  */
 export async function buildHttp(services: HttpServices, { development = false } = {}): Promise<FastifyInstance> {
@@ -45,6 +46,7 @@ export async function buildHttp(services: HttpServices, { development = false } 
     genReqId: () => randomUUID(),
     bodyLimit: JSON_BYTES,
     requestTimeout: SLOWEST_REQUEST_MS,
+    clientErrorHandler: answerGarbled,
     frameworkErrors: (error, request, reply) => void answerProblem(error, request, reply),
   }).withTypeProvider<ZodTypeProvider>();
   app.setValidatorCompiler(validatorCompiler);
@@ -59,7 +61,15 @@ export async function buildHttp(services: HttpServices, { development = false } 
   guardAccess(app, services);
   await describeApi(app, services.version);
   serveMetrics(app, services);
-  await app.register(async (scope) => apiRoutes(scope.withTypeProvider<ZodTypeProvider>(), services), { prefix: '/api/v1' });
+  await app.register(
+    async (api) => {
+      await api.register(async (scope) => apiRoutes(scope.withTypeProvider<ZodTypeProvider>(), services), { prefix: '/v1' });
+      api.setNotFoundHandler((request) => {
+        throw new Refusal('not-found', `There is no ${request.method} ${request.url.split('?')[0]} in this API; GET /api/v1/openapi.json lists what there is.`);
+      });
+    },
+    { prefix: '/api' },
+  );
   return app as unknown as FastifyInstance;
 }
 
@@ -77,7 +87,4 @@ async function apiRoutes(api: Api, services: HttpServices): Promise<void> {
   await api.register(async (scope) => advisoryRoutes(scope.withTypeProvider<ZodTypeProvider>(), services));
   await api.register(async (scope) => layerRoutes(scope.withTypeProvider<ZodTypeProvider>(), services));
   api.get('/openapi.json', { config: { access: 'anyone' }, schema: { hide: true } }, async (_request, reply) => reply.header('cache-control', 'no-cache').send(api.swagger()));
-  api.setNotFoundHandler((request) => {
-    throw new Refusal('not-found', `There is no ${request.method} ${request.url.split('?')[0]} in this API; GET /api/v1/openapi.json lists what there is.`);
-  });
 }

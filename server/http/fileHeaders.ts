@@ -1,7 +1,10 @@
 import type { Source } from '../store';
 
 /** `attachment`, with the name twice (RFC 6266): plain letters for old clients, all letters for others. */
-export const asAttachment = (fileName: string): string => `attachment; filename="${fileName.replace(/[^\w.-]+/g, '_')}"; filename*=UTF-8''${encodeURIComponent(fileName).replace(/['()*]/g, (letter) => `%${letter.charCodeAt(0).toString(16).toUpperCase()}`)}`;
+export const asAttachment = (fileName: string): string => `attachment; filename="${fileName.replace(/[^\w.-]+/g, '_')}"; filename*=UTF-8''${percentEncoded(fileName)}`;
+
+/** RFC 8187. Half a letter, left where a long name was cut, cannot be encoded and goes. */
+const percentEncoded = (text: string): string => encodeURIComponent(text.replace(/\p{Surrogate}/gu, '')).replace(/['()*]/g, (letter) => `%${letter.charCodeAt(0).toString(16).toUpperCase()}`);
 
 /** Headers of a stored file: never changed, never shown as a page. */
 export const fileHeaders = ({ contentType, fileName }: Source, fallback: string): Record<string, string> => ({

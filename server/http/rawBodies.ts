@@ -19,13 +19,19 @@ export function sourceOf(request: FastifyRequest): Source {
   return { bytes: request.body, contentType: request.headers['content-type'] ?? 'application/octet-stream', fileName: fileNameOf(request.headers['x-file-name']) };
 }
 
+const MOST_NAME_LETTERS = 200;
+
 function fileNameOf(header: string | string[] | undefined): string | null {
   const given = [header].flat()[0];
   if (!given) return null;
+  return [...decoded(given).replace(/\p{Cc}/gu, '')].slice(0, MOST_NAME_LETTERS).join('') || null;
+}
+
+function decoded(text: string): string {
   try {
-    return decodeURIComponent(given).slice(0, 200);
+    return decodeURIComponent(text);
   } catch {
-    return given.slice(0, 200);
+    return text;
   }
 }
 

@@ -31,6 +31,8 @@ export function headingOf({ event, impact, advisory, now, version }: Exported): 
   ];
 }
 
-/** Name of the file, without its ending. */
+const MOST_NAME_LETTERS = 40;
+
+/** Name of the file, without its ending. A long name of an event is cut, so that the revision never is. */
 export const fileStem = ({ event, impact, advisory }: Exported, what: string): string =>
-  `${event.exercise ? 'EXERCISE ' : ''}${event.name} advisory ${advisory.number} revision ${impact.revision} ${what}`.replace(/[^\p{L}\p{N}]+/gu, '-').slice(0, 120);
+  `${event.exercise ? 'EXERCISE ' : ''}${[...event.name].slice(0, MOST_NAME_LETTERS).join('')} advisory ${advisory.number} revision ${impact.revision} ${what}`.replace(/[^\p{L}\p{N}]+/gu, '-');

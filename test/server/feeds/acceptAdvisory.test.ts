@@ -74,6 +74,14 @@ test("a file is held against the event's clock", async () => {
   expect(await codes({ startsAt: '2004-08-01T00:00:00Z', anchoredAt: '2004-08-05T00:00:00Z', rate: 1 })).toContain('issued-in-future');
 });
 
+test('an exercise without a clock gets it from its first advisory, which is then never still to come', async () => {
+  const exercise = await services.store.events.add({ ...event, id: 'x', exercise: true });
+  const early = { ...services, clock: { nowMs: () => Date.parse('2004-07-01T00:00:00Z') } };
+  const codes = async (held: EventRecord): Promise<string[]> => ((await readReceived(early, { ...received(), event: held })) as { warnings: { code: string }[] }).warnings.map(({ code }) => code);
+  expect(await codes(event)).toContain('issued-in-future');
+  expect(await codes(exercise)).not.toContain('issued-in-future');
+});
+
 test('a file is held against the advisory before it', async () => {
   await acceptAdvisory(services, received());
   const { warnings } = (await readReceived(services, received(bulletin('al102017.fstadv.004')))) as { warnings: { code: string }[] };

@@ -56,6 +56,16 @@ describe('an accepted advisory', () => {
     expect(source.headers['cache-control']).toContain('immutable');
   });
 
+  test.each([
+    ['is cut at whole letters', `${'%61'.repeat(199)}%F0%9F%8C%80%F0%9F%8C%80.txt`, `${'a'.repeat(199)}\u{1F300}`],
+    ['has no line ends or other controls', 'a%0D%0ASet-Cookie: x%00.txt', 'aSet-Cookie: x.txt'],
+    ['is taken as it is where it is not percent-encoded', '100%.txt', '100%.txt'],
+  ])('keeps its file name, which %s', async (_, sent, kept) => {
+    const { advisory } = (await post(plain, { 'x-file-name': sent })).json<Answer>();
+    const source = await world.call({ url: path(`/${advisory.id}/source`), as: 'viewer' });
+    expect(decodeURIComponent(String(source.headers['content-disposition']).split("UTF-8''")[1])).toBe(kept);
+  });
+
   test('is listed newest first, a page at a time', async () => {
     for (const number of ['5', '6', '7']) await post({ ...plain, number });
     expect((await list()).items.map(({ number }) => number)).toEqual(['7', '6', '5']);

@@ -1,3 +1,5 @@
+import { connect } from 'node:net';
+import type { AddressInfo } from 'node:net';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import type { Problem } from '../../../lib/wire';
 import { acceptAdvisory } from '../../../server/feeds';
@@ -58,7 +60,7 @@ describe('what is not there', () => {
     const other = await httpWorld();
     other.app.setNotFoundHandler({}, (_request, reply) => reply.type('text/html').send('<h1>page</h1>'));
     expect((await other.call({ url: '/board', as: null })).body).toBe('<h1>page</h1>');
-    expect(problemOf(await other.call({ url: '/api/v1/weather' })).status).toBe(404);
+    for (const url of ['/api', '/api/', '/api/v1', '/api/v1/weather', '/api/v2/events']) expect(problemOf(await other.call({ url, as: null })).status, url).toBe(404);
     expect((await other.call({ url: '/board', as: null })).headers['content-security-policy']).toContain("script-src 'self'");
     await other.close();
   });
@@ -68,6 +70,38 @@ describe('what is not there', () => {
     for (const url of ['/api/v1/weather', '/api/v1/events/nowhere', '/api/v1/events?limit=x']) problems.push(problemOf(await world.call({ url })));
     for (const problem of problems) expect(Object.keys(problem)).toEqual(expect.arrayContaining(['type', 'title', 'status', 'detail', 'instance']));
     for (const problem of problems) expect(problem.type).toMatch(/^urn:leeboard:problem:/);
+  });
+});
+
+describe('what is no request at all, or too much of one, is a problem document too', () => {
+  let world: World;
+  let port: number;
+  beforeAll(async () => {
+    world = await httpWorld();
+    await world.app.listen({ host: '127.0.0.1', port: 0 });
+    port = (world.app.server.address() as AddressInfo).port;
+  });
+  afterAll(() => world.close());
+
+  /** What the server says to bytes, until it hangs up. */
+  const tell = (bytes: string): Promise<string> =>
+    new Promise((resolve, reject) => {
+      let heard = '';
+      connect(port, '127.0.0.1')
+        .on('data', (part) => (heard += part.toString()))
+        .on('end', () => resolve(heard))
+        .on('error', reject)
+        .write(bytes);
+    });
+
+  test.each([
+    ['an encrypted greeting (RFC 8446)', '\x16\x03\x01\x02\x00\x01\r\n\r\n', 400, 'bad-request'],
+    ['headers above the limit (RFC 6585, section 5)', `GET /api/v1/health HTTP/1.1\r\nHost: 127.0.0.1\r\nCookie: ${'x'.repeat(20_000)}\r\n\r\n`, 431, 'headers-too-large'],
+  ])('%s', async (_, bytes, status, code) => {
+    const [head, body] = (await tell(bytes)).split('\r\n\r\n');
+    expect(head).toMatch(new RegExp(`^HTTP/1.1 ${status} `));
+    expect(head).toContain('Content-Type: application/problem+json');
+    expect(JSON.parse(body)).toMatchObject({ status, type: `urn:leeboard:problem:${code}` });
   });
 });
 

@@ -160,6 +160,14 @@ describe('exports', () => {
     expect(file.features).toHaveLength(1);
   });
 
+  test('of an event with a long name are named by whole letters (RFC 8187) and still say the revision', async () => {
+    const long = await world.newEvent({ name: '\u{20000}'.repeat(60), exercise: true });
+    await world.publish(await world.issue(long.id));
+    const answer = await world.call({ url: `/api/v1/events/${long.id}/exports/zones.csv` });
+    expect(answer.statusCode).toBe(200);
+    expect(decodeURIComponent(/filename\*=UTF-8''(\S+)/.exec(String(answer.headers['content-disposition']))![1])).toMatch(/^EXERCISE-\u{20000}{40}-advisory-5-revision-1-zones\.csv$/u);
+  });
+
   test.each(['report.pdf', 'impact.xlsx', 'alert.cap.xml', 'zones'])('%s is not made in this release, and the answer says what is', async (name) => {
     expect(problemOf(await get(`/exports/${name}`)).detail).toContain('zones.csv, assets.csv, swath.geojson');
   });
