@@ -8,6 +8,9 @@ export type QuadrantKt = readonly [ne: number, se: number, sw: number, nw: numbe
 /** "Does not reach": the peak of such a quadrant stays this far under the threshold. */
 const UNDER_THRESHOLD_KT = 0.1;
 
+/** Whether a quadrant with this peak reaches a threshold: rounding may leave a peak a hair under it, "does not reach" lies farther down. */
+export const reaches = (peakKt: number, thresholdKt: number): boolean => peakKt > thresholdKt - UNDER_THRESHOLD_KT / 2;
+
 /** The exponent of a power law that falls from `inner` at `radiusInner` to `outer` at `radiusOuter`; 0 where the wind does not fall. */
 export function decayExponent(radiusInner: number, inner: number, radiusOuter: number, outer: number): number {
   return inner > outer ? Math.log(inner / outer) / Math.log(radiusOuter / radiusInner) : 0;

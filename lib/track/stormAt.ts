@@ -7,7 +7,7 @@ import type { Inferred, Knot } from './knots';
 import { hermite } from './monotoneCubic';
 import { motionOf } from './motion';
 import { pathAt } from './path';
-import { peaksBetween } from './quadrantPeaks';
+import { peaksBetween, reaches } from './quadrantPeaks';
 import type { QuadrantKt } from './quadrantPeaks';
 import { legAt } from './track';
 import type { Track } from './track';
@@ -66,7 +66,7 @@ export function stormAt(track: Track, leadHours: number): StormState | null {
     radiiKm: byThreshold((t, kt) => {
       if (!structure) return maxWindKt < kt * track.oneMinute ? [0, 0, 0, 0] : null;
       const { windKt, radiiKm } = structure.rings[2 - t];
-      return map(radiiKm, (km, q) => (structure.peaksKt[q] >= windKt ? km : 0));
+      return map(radiiKm, (km, q) => (reaches(structure.peaksKt[q], windKt) ? km : 0));
     }),
     structure,
     stage: fraction === 1 ? b.stage : a.stage,

@@ -24,6 +24,11 @@ describe('radii', () => {
     );
   });
 
+  test('are the given ones where rounding leaves the peak of a quadrant a hair under its threshold (a failure found by seed 535668945)', () => {
+    const track = makeTrack(advisoryOf([{ lead: 0, lat: 8, lon: 0, maxWindKt: 25 }, { lead: 6, lat: 8, lon: 0, maxWindKt: 140, radiiNm: { '34': ring(40, 0, 40, 0), '50': ring(12, 0, 19.32640419867838, 0), '64': ring(3.5999999999999996, 0, 7.874999999999999, 0) } }]));
+    expect(nmiAt(stormAt(track, 6), '64')[0]).toBeCloseTo(3.6, 6);
+  });
+
   test('lie inside one another at every time', () => {
     fc.assert(
       fc.property(storms, fc.double({ min: 0, max: 1, noNaN: true }), (advisory, f) => {
