@@ -58,8 +58,10 @@ export function boxAround(camera: Camera, size: Size): Bounds {
   };
 }
 
+export const COARSE_WORLD: LandWish = { path: COARSE, box: null };
+
 export const landWish = (camera: Camera, size: Size): LandWish =>
-  camera.zoom < FINE_ZOOM || size.width === 0 ? { path: COARSE, box: null } : { path: FINE, box: boxAround(camera, size) };
+  camera.zoom < FINE_ZOOM || size.width === 0 ? COARSE_WORLD : { path: FINE, box: boxAround(camera, size) };
 
 export async function loadLand({ path, box }: LandWish): Promise<Land> {
   const polygons = await loadPolygons(path);
