@@ -8,8 +8,10 @@ export type QuadrantKt = readonly [ne: number, se: number, sw: number, nw: numbe
 /** "Does not reach": the peak of such a quadrant stays this far under the threshold. */
 const UNDER_THRESHOLD_KT = 0.1;
 
-/** Whether a quadrant with this peak reaches a threshold: rounding may leave a peak a hair under it, "does not reach" lies farther down. */
-export const reaches = (peakKt: number, thresholdKt: number): boolean => peakKt > thresholdKt - UNDER_THRESHOLD_KT / 2;
+const ROUNDING_KT = 1e-9;
+
+/** Whether a quadrant with this peak reaches a threshold; rounding may leave a peak that does a hair under it. */
+export const reaches = (peakKt: number, thresholdKt: number): boolean => peakKt >= thresholdKt - ROUNDING_KT;
 
 /** The exponent of a power law that falls from `inner` at `radiusInner` to `outer` at `radiusOuter`; 0 where the wind does not fall. */
 export function decayExponent(radiusInner: number, inner: number, radiusOuter: number, outer: number): number {
@@ -39,11 +41,18 @@ export function quadrantPeaksKt(maxWindKt: number, radiusMaxWindKm: number, radi
   return [ne, se, sw, nw];
 }
 
-/** Peaks between two points: shares of the maximum change linearly, one quadrant always attains it, and none rises above its own peaks at both ends. */
+/**
+ * Peaks between two points: shares of the maximum change linearly, relative to the greatest among the quadrants that hold the maximum
+ * at either point, so that one of those always attains it. No other quadrant rises above its own peaks at both ends.
+ */
 export function peaksBetween(a: QuadrantKt, maxA: number, b: QuadrantKt, maxB: number, fraction: number, maxWindKt: number): QuadrantKt {
   const share = (peakKt: number, max: number): number => (max > 0 ? peakKt / max : 1);
   const shares = a.map((peakKt, q) => share(peakKt, maxA) + fraction * (share(b[q], maxB) - share(peakKt, maxA)));
-  const greatest = Math.max(...shares);
-  const [ne, se, sw, nw] = shares.map((s, q) => Math.min((s / greatest) * maxWindKt, Math.max(a[q], b[q])));
+  const holds = a.map((peakKt, q) => peakKt >= maxA || b[q] >= maxB);
+  const greatest = Math.max(...shares.filter((_, q) => holds[q]));
+  const [ne, se, sw, nw] = shares.map((s, q) => {
+    const peakKt = (s / greatest) * maxWindKt;
+    return holds[q] ? peakKt : Math.min(peakKt, maxWindKt, Math.max(a[q], b[q]));
+  });
   return [ne, se, sw, nw];
 }
