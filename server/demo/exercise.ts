@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import { acceptAdvisory } from '../feeds';
+import { acceptAdvisory, acceptLayer } from '../feeds';
 import type { Accepted } from '../feeds';
 import type { Services } from '../services';
 import type { EventRecord } from '../store';
@@ -61,9 +61,8 @@ export function demoExercise(services: Needed, scenario: Scenario) {
       const at = new Date(clock.nowMs()).toISOString();
       const event = await store.events.add({ id: randomUUID(), name: scenario.eventName, timeZone: scenario.timeZone, exercise: true, demo: true, clock: null, createdAt: at });
       for (const { kind, name, bytes, contentType, fileName } of scenario.layers) {
-        const inspection = await services.inspectLayer({ kind, assetClass: name, bytes });
-        if (!inspection.ok) throw new Error(`Demo layer ${fileName} cannot be read: ${inspection.errors[0]?.message}`);
-        await store.layers.add({ eventId: event.id, kind, name, rows: inspection.rows, classes: inspection.classes, source: { bytes, contentType, fileName }, receivedAt: at, receivedBy: ISSUER });
+        const accepted = await acceptLayer(services, { eventId: event.id, kind, name, source: { bytes, contentType, fileName }, by: ISSUER });
+        if (!accepted.ok) throw new Error(`Demo layer ${fileName} cannot be read: ${accepted.errors[0]?.message}`);
       }
       for (let index = 0; index < ADVISORIES_AT_START; index++) {
         const accepted = await issue(event, index, ISSUER);

@@ -2,6 +2,7 @@ import { decodeText, readAdvisory } from '../../lib/advisory';
 import type { Advisory, InputError, ReadOptions, Reading } from '../../lib/advisory';
 import { eventNowMs } from '../../lib/wire';
 import type { StoredAdvisory } from '../../lib/wire';
+import { holdsNul } from '../holdsNul';
 import type { Services } from '../services';
 import type { EventRecord, Source } from '../store';
 
@@ -36,7 +37,9 @@ export async function readReceived({ store, clock }: Pick<Needed, 'store' | 'clo
   if (!decoded.ok) return { ok: false, format: how.format ?? null, errors: [{ message: decoded.message }] };
   const previous = await store.advisories.latest(event.id);
   const now = event.exercise && event.clock === null ? {} : { nowMs: eventNowMs(event.clock, clock.nowMs()) };
-  return readAdvisory(decoded.text, { ...how, ...now, ...(previous ? { previous } : {}) });
+  const reading = readAdvisory(decoded.text, { ...how, ...now, ...(previous ? { previous } : {}) });
+  if (reading.ok && holdsNul(reading.advisory)) return { ok: false, format: reading.format, errors: [{ message: 'a name or number holds a NUL character (\\u0000): take it out' }] };
+  return reading;
 }
 
 /**

@@ -1,3 +1,4 @@
-/** Ways in for forecasts: whatever brings one, it goes through `acceptAdvisory`. */
+/** Ways in: whatever brings a forecast or a layer, it goes through one of these. */
 export { acceptAdvisory, readReceived } from './acceptAdvisory';
 export type { Accepted } from './acceptAdvisory';
+export { acceptLayer } from './acceptLayer';

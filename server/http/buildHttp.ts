@@ -16,6 +16,7 @@ import type { Api, HttpServices } from './httpServices';
 import { serveMetrics } from './metrics';
 import { keepToOwnSite } from './ownSite';
 import { Refusal } from './problems';
+import { refuseNul } from './refuseNul';
 import { advisoryRoutes } from './routes/advisories';
 import { demoRoutes } from './routes/demo';
 import { eventRoutes } from './routes/events';
@@ -59,6 +60,7 @@ export async function buildHttp(services: HttpServices, { development = false } 
   // Files that come in are kept as they are, so none is unpacked on the way.
   await app.register(compress, { encodings: ['gzip', 'identity'], globalDecompression: false });
   guardAccess(app, services);
+  refuseNul(app);
   await describeApi(app, services.version);
   serveMetrics(app, services);
   await app.register(

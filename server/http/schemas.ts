@@ -35,8 +35,8 @@ export const page = {
 };
 export const pageQuery = z.strictObject(page);
 
-/** A revision of an event; without it, the newest. */
-export const revision = z.coerce.number().int().positive().optional();
+/** A revision of an event; without it, the newest. Stores count them in 32 bits. */
+export const revision = z.coerce.number().int().positive().max(2 ** 31 - 1).optional();
 
 const id = z.string().min(1).max(100);
 export const eventPath = z.object({ id });

@@ -3,6 +3,7 @@ import { LAYER_KINDS } from '../../../lib/exposure';
 import type { RowError } from '../../../lib/exposure';
 import { layerSchema, layerStoredSchema, MOST_LAYER_BYTES } from '../../../lib/wire';
 import type { InputError } from '../../../lib/advisory';
+import { acceptLayer } from '../../feeds';
 import { callerOf } from '../access';
 import { eventOf } from '../eventOf';
 import { fileHeaders } from '../fileHeaders';
@@ -16,7 +17,7 @@ const ACCEPTS = ['application/geo+json', 'application/json', 'text/csv', 'text/p
 const whatItIs = z.strictObject({ kind: z.enum(LAYER_KINDS), name: z.string().trim().min(1, 'a layer needs a name').max(120) });
 
 export function layerRoutes(app: Api, services: HttpServices): void {
-  const { store, runs, clock, inspectLayer } = services;
+  const { store } = services;
   keepBodiesRaw(app, ACCEPTS);
 
   app.post(
@@ -30,20 +31,10 @@ export function layerRoutes(app: Api, services: HttpServices): void {
       const event = await eventOf(services, request.params.id);
       const { kind, name } = request.query;
       const source = sourceOf(request);
-      const inspection = await inspectLayer({ kind, assetClass: name, bytes: source.bytes });
-      if (!inspection.ok) throw new Refusal('invalid', 'The layer cannot be read; nothing was stored.', inspection.errors.map(inputErrorOf));
-      const layer = await store.layers.add({
-        eventId: event.id,
-        kind,
-        name,
-        rows: inspection.rows,
-        classes: inspection.classes,
-        source,
-        receivedAt: new Date(clock.nowMs()).toISOString(),
-        receivedBy: callerOf(request).name,
-      });
-      runs.request(event.id);
-      return reply.code(201).send({ layer, accepted: inspection.rows, rejected: inspection.rejected });
+      const accepted = await acceptLayer(services, { eventId: event.id, kind, name, source, by: callerOf(request).name });
+      if (!accepted.ok) throw new Refusal('invalid', 'The layer cannot be read; nothing was stored.', accepted.errors.map(inputErrorOf));
+      const { layer, rejected } = accepted;
+      return reply.code(201).send({ layer, accepted: layer.rows, rejected });
     },
   );
 

@@ -52,10 +52,10 @@ describe('the forecast track over an island', () => {
     expect(impact.zones.map(({ people }) => people).reduce((a, b) => a + b)).toBe(impact.totals.people);
   });
 
-  test('brings a hurricane over the island and none to an asset on another ocean', () => {
+  test('brings a hurricane over the island and none to an asset on another ocean', async () => {
     expect(impact.totals.peopleAtOrAbove['64'].track).toBeGreaterThan(0);
-    const rows = openAssets(bulk.assets!);
-    const page = pageOfAssets(rows, { offset: 0, limit: 10 });
+    const rows = await openAssets(bulk.assets!);
+    const page = await pageOfAssets(rows, { offset: 0, limit: 10 });
     expect(page.items.filter(({ maxWindKt }) => maxWindKt > 34).map(({ id }) => id).sort()).toEqual(['h1', 'h2']);
     expect(page.items[2]).toMatchObject({ id: 'h3', maxWindKt: 0, arrival: { '34': { track: null } } });
   });
@@ -98,8 +98,8 @@ describe('members over an island', () => {
     expect(impact.zones[0].chance['34']).toBeGreaterThanOrEqual(impact.zones[0].chance['50']!);
   });
 
-  test('asset rows carry chance and moments in step with the impact', () => {
-    const row = openAssets(alone.bulk.assets!).row(0);
+  test('asset rows carry chance and moments in step with the impact', async () => {
+    const row = (await openAssets(alone.bulk.assets!)).row(0);
     expect(row.chance['34']).toBeGreaterThan(0.5);
     expect(Date.parse(row.arrival['34'].early!)).toBeLessThanOrEqual(Date.parse(row.arrival['34'].late!));
   });

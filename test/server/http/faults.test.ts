@@ -1,9 +1,10 @@
 import { connect } from 'node:net';
 import type { AddressInfo } from 'node:net';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import type { Problem } from '../../../lib/wire';
+import type { Event, Problem } from '../../../lib/wire';
 import { acceptAdvisory } from '../../../server/feeds';
-import { bulletin, httpWorld, problemOf } from './world';
+import { ENGINES } from '../store/engines';
+import { bulletin, httpWorld, plain, problemOf } from './world';
 import type { World } from './world';
 
 describe('a fault', () => {
@@ -102,6 +103,46 @@ describe('what is no request at all, or too much of one, is a problem document t
     expect(head).toMatch(new RegExp(`^HTTP/1.1 ${status} `));
     expect(head).toContain('Content-Type: application/problem+json');
     expect(JSON.parse(body)).toMatchObject({ status, type: `urn:leeboard:problem:${code}` });
+  });
+});
+
+describe.each(ENGINES)('on %s, text that no database should be asked for', (_, open) => {
+  let world: World;
+  let event: Event;
+  let close: () => Promise<void>;
+  beforeAll(async () => {
+    const opened = await open();
+    close = opened.close;
+    world = await httpWorld({ store: opened.store });
+    event = await world.newEvent();
+  }, 60_000);
+  afterAll(async () => {
+    await world.close();
+    await close();
+  });
+
+  test.each<[string, string, string, object | string | undefined, number]>([
+    ['a name of an event', 'POST', '', { name: 'Quil\0lon', timeZone: 'UTC', exercise: false }, 422],
+    ['an entry of the log', 'POST', '/:id/log', { kind: 'note', text: 'a\0b' }, 422],
+    ["a storm's name", 'POST', '/:id/advisories', { ...plain, storm: { name: 'Quil\0lon' } }, 422],
+    ['an address', 'GET', '/%00', undefined, 400],
+    ['a query', 'GET', '/:id/impact/assets?class=a%00b', undefined, 400],
+    ["a layer's name", 'POST', '/:id/layers?kind=assets&name=a%00b', 'name,lat,lon\nA,1,1\n', 400],
+  ])('NUL in %s is refused', async (_what, method, path, payload, status) => {
+    const headers = { 'content-type': typeof payload === 'string' ? 'text/csv' : 'application/json' };
+    const answer = await world.call({ method: method as 'GET', url: `/api/v1/events${path.replace(':id', event.id)}`, ...(payload === undefined ? {} : { payload, headers }) });
+    expect(problemOf(answer).status).toBe(status);
+    expect(answer.body).toContain('NUL');
+  });
+
+  test('a backslash and some letters are no NUL', async () => {
+    expect((await world.call({ method: 'POST', url: `/api/v1/events/${event.id}/log`, payload: { kind: 'note', text: 'C:\\u0000' } })).statusCode).toBe(201);
+  });
+
+  test('a revision beyond all counting is refused, one that is only not there is not found', async () => {
+    const statusOf = async (revision: number): Promise<number> => (await world.call({ url: `/api/v1/events/${event.id}/impact?revision=${revision}` })).statusCode;
+    expect(await statusOf(2 ** 31)).toBe(400);
+    expect(await statusOf(2 ** 31 - 1)).toBe(404);
   });
 });
 
