@@ -30,7 +30,7 @@ export function Headline({ impact, children }: { impact: Impact | null; children
           </dl>
           <p className={styles.note}>
             {view.basis === 'members' ? words.headline.members(formatCount(view.members)) : words.headline.track}{' '}
-            {view.since ? words.headline.change(view.since.number) : impact.change ? words.headline.waiting : words.headline.noChange}
+            {view.since ? words.headline.change(view.since.number) : impact.change ? words.headline.otherBasis(impact.change.sinceNumber) : words.headline.noChange}
           </p>
         </>
       )}

@@ -56,7 +56,7 @@ export const en = {
     track: 'On the forecast track; ranges follow with the members.',
     change: (number: string) => `Change: since advisory ${number}.`,
     noChange: 'No advisory before to compare with.',
-    waiting: 'Change follows with the members.',
+    otherBasis: (number: string) => `Advisory ${number} was not counted on the same basis: no change is given.`,
     empty: 'Nothing is computed yet. Issue an advisory under Forecasts.',
   },
   zones: {
