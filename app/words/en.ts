@@ -86,7 +86,7 @@ export const en = {
     none: 'No zones yet. An admin adds them under Layers.',
     foot: (reached: number, of: number) => `${reached} of ${of} zones reached by 34 kt on the track.`,
     footUnknown: (count: number) => `${count} without a clearance time.`,
-    footSlack: 'Slack = start-by time less now; clearance hours are the layer’s own.',
+    footSlack: 'Slack = start-by time less now; start by = early arrival less hours to clear, where 1 in 10 members bring 34 kt; clearance hours are the layer’s own.',
     files: 'Take away',
   },
   deadlines: { title: 'Next deadlines', none: 'No deadline on this forecast.', line: (slack: string, clock: string) => `${slack}, start by ${clock}` },

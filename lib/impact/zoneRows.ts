@@ -11,10 +11,13 @@ import { spreadOver, trackOnly } from './spread';
 
 const HOUR_MS = 3_600_000;
 
+/** A zone that fewer members reach is not given a time to start: common practice plans for a chance of one in ten (no source). */
+const LEAST_CHANCE_TO_ACT = 0.1;
+
 /**
  * One row a zone. A zone takes the strongest wind and the first arrival among the places in it where people live: the first
- * street to be hit sets the clock. Start-by is the early arrival of 34 kt (on the track while members are not computed, or where
- * too few reach it) less the hours the zone takes to clear.
+ * street to be hit sets the clock. Start-by is the early arrival of 34 kt (that of the track while members are not computed) less the
+ * hours the zone takes to clear; none where fewer than one member in ten brings 34 kt.
  */
 export function zoneRows(exposure: Exposure, hazard: PlaceHazard, members: MemberSummary | null, issuedAtMs: number, nowMs: number): ZoneRow[] {
   const tracks = zoneTracks(exposure, hazard);
@@ -23,7 +26,8 @@ export function zoneRows(exposure: Exposure, hazard: PlaceHazard, members: Membe
     const moments = (t: number, track: Float64Array, values: Float32Array | undefined): Moments =>
       zoneMoments(issuedAtMs, track[at(t)], members && values ? values.subarray(at(t) * members.members, (at(t) + 1) * members.members) : null);
     const arrival = byThreshold((t) => moments(t, tracks.arrival, members?.zoneArrival));
-    const first = arrival['34'].early ?? arrival['34'].track;
+    const reached = members ? countFinite(members.zoneArrival, at(0) * members.members, members.members) / members.members : 1;
+    const first = reached < LEAST_CHANCE_TO_ACT ? null : (arrival['34'].early ?? arrival['34'].track);
     const startByMs = first !== null && zone.clearanceHours !== null ? Date.parse(first) - zone.clearanceHours * HOUR_MS : null;
     return {
       id: zone.id,

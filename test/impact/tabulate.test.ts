@@ -88,6 +88,18 @@ describe('over members', () => {
     expect(zone.startBy).toBe('2031-09-19T17:24:00Z');
   });
 
+  test('a zone that fewer than one member in ten reaches has times and a chance, but no start-by', () => {
+    const members = 20;
+    const few = { ...mergeChunks([], { members, assets: 2, zones: 2, classes: 2 }) };
+    few.zoneArrival[3 * members] = 18;
+    few.zoneEnd[3 * members] = 22;
+    const withClearance = { ...exposure, zones: exposure.zones.map((entry) => ({ ...entry, clearanceHours: 10 })) };
+    const row = tabulate(run, withClearance, hazard, few, null).impact.zones[1];
+    expect(row).toMatchObject({ startBy: null, slackHours: null });
+    expect(row.chance['34']).toBe(0.05);
+    expect(row.arrival['34'].early).not.toBeNull();
+  });
+
   test('the mean of the total is the mean over members, its percentiles are those of joint totals', () => {
     expect(impact.totals.peopleAtOrAbove['34'].mean).toBe(Math.round((307 + 307 + 300) / 4));
     expect(impact.totals.peopleAtOrAbove['34'].p50).toBe(304);
