@@ -158,7 +158,7 @@ export type AssetSort = (typeof ASSET_SORTS)[number];
 /** Strongest wind first, by first arrival of 34 kt, by name or by class; equals stay as they were brought in. */
 function assetOrder(sort: AssetSort, { peakKt, arrival }: AssetTable, { names, classes, classIndex }: Pick<Head, 'names' | 'classes' | 'classIndex'>): Uint32Array {
   const when = (i: number): number => (Number.isNaN(arrival[i * 3]) ? Infinity : arrival[i * 3]);
-  // Four times as quick here as a collator, whose results are the same (Node 20).
+  // Far quicker than a collator made once, with the same results (Node 20).
   const inAlphabet = (a: string, b: string): number => a.localeCompare(b, 'en');
   const compare: Record<AssetSort, (a: number, b: number) => number> = {
     name: (a, b) => inAlphabet(names[a], names[b]),
@@ -170,11 +170,18 @@ function assetOrder(sort: AssetSort, { peakKt, arrival }: AssetTable, { names, c
   return Uint32Array.from(names, (_, i) => i).sort((a, b) => order(a, b) || a - b);
 }
 
-/** A page of rows in an order (strongest wind first unless said), of one layer and class where they are named. */
+const ROWS_A_TURN = 250;
+
+/** A page of rows in an order (strongest wind first unless said), of one layer and class where they are named. Others have their turns meanwhile. */
 export async function pageOfAssets(rows: AssetRows, query: { layer?: string; class?: string; sort?: AssetSort; offset: number; limit: number }): Promise<{ items: AssetRow[]; total: number; offset: number }> {
   const order = rows.inOrder(query.sort ?? 'maxWindKt');
-  // Sorting 50,000 takes some 30 ms the first time: others have their turn before the rows are made.
   await nextTurn();
   const chosen = order.filter((i) => (query.layer === undefined || rows.layerOf(i) === query.layer) && (query.class === undefined || rows.classOf(i) === query.class));
-  return { items: Array.from(chosen.subarray(query.offset, query.offset + query.limit), rows.row), total: chosen.length, offset: query.offset };
+  const shown = chosen.subarray(query.offset, query.offset + query.limit);
+  const items: AssetRow[] = [];
+  for (const asset of shown) {
+    items.push(rows.row(asset));
+    if (items.length % ROWS_A_TURN === 0) await nextTurn();
+  }
+  return { items, total: chosen.length, offset: query.offset };
 }

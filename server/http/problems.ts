@@ -18,7 +18,6 @@ export const REFUSALS = {
   'too-many-requests': [429, 'Too many requests'],
   'headers-too-large': [431, 'The headers are too large'],
   fault: [500, 'Something went wrong on the server'],
-  'not-ready': [503, 'The server is not ready'],
 } as const satisfies Record<string, readonly [status: number, title: string]>;
 
 export type RefusalCode = keyof typeof REFUSALS;

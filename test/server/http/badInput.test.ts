@@ -111,6 +111,14 @@ describe('taken, with what to look at', () => {
     expect(await held()).toBe(1);
   });
 
+  test('a storm on the other side of the world, which only reaches nobody here', async () => {
+    await world.call({ method: 'POST', url: `/api/v1/events/${eventId}/layers?kind=assets&name=Shelters`, payload: 'name,lat,lon\nHale Hall,25,-48.1\n', headers: { 'content-type': 'text/csv' } });
+    const answer = await send(points({ lat: -16.2, lon: 151.8 }, { lat: -17, lon: 149.9 }), TYPES.json);
+    expect(answer.statusCode).toBe(201);
+    expect(answer.json<{ warnings: object[] }>().warnings).toEqual([]);
+    expect(await held()).toBe(1);
+  });
+
   test('a storm other than the one before', async () => {
     await send(JSON.stringify(plain), TYPES.json);
     const { warnings } = (await send(bulletin('al012004.fstadv.012'))).json<{ warnings: { code: string }[] }>();
