@@ -1,3 +1,2 @@
 /** The sockets: one room for each event, every screen at the same revision. The rules are in RULES.md. */
 export { openLive } from './openLive';
-export type { Timers } from './timers';

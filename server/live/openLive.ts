@@ -3,15 +3,15 @@ import { Server } from 'socket.io';
 import type { Socket } from 'socket.io';
 import { LIVE_NAMESPACE } from '../../lib/wire';
 import type { ClientToServer, Identity, ServerToClient } from '../../lib/wire';
+import { answersTo, comesFromHere } from '../http';
 import type { Services } from '../services';
+import { machineTimers } from '../timers';
+import type { Timers } from '../timers';
 import { credentialsOf, identifyBy, refusal } from './handshake';
 import { CLIENT_MESSAGE_BYTES, CLOCK_EVERY_MS, IDENTIFY_EVERY_MS } from './limits';
 import { receiver } from './receiver';
 import { openRooms } from './rooms';
-import { sameOrigin } from './sameOrigin';
 import type { Screen } from './screen';
-import { machineTimers } from './timers';
-import type { Timers } from './timers';
 
 interface SocketData {
   identity: Identity;
@@ -29,15 +29,16 @@ export interface Live {
 
 /** Serves the namespace `/live` on an HTTP server. Upgrades of other paths are left alone. */
 export function openLive(httpServer: HttpServer, services: Services, timers: Timers = machineTimers): Live {
-  const { auth, bus, logger } = services;
+  const { auth, bus, logger, settings } = services;
   let closing = false;
   const io: LiveServer = new Server({
     serveClient: false,
     perMessageDeflate: false,
     maxHttpBufferSize: CLIENT_MESSAGE_BYTES,
-    allowRequest: ({ headers }, decide) => {
+    allowRequest: ({ method = 'GET', headers }, decide) => {
       if (closing) decide('the server is closing', false);
-      else if (!sameOrigin(headers)) decide('foreign origin', false);
+      else if (!answersTo(settings, headers.host)) decide('this server does not go by that name', false);
+      else if (!comesFromHere(method, headers)) decide('foreign origin', false);
       else decide(null, true);
     },
   });

@@ -7,7 +7,7 @@ import { LARGE_IMPACT_BYTES, PROGRESS_APART_MS, presenceApartMs } from './limits
 import { bytesOf } from './bytesOf';
 import type { Message, Screen } from './screen';
 import { throttle } from './throttle';
-import type { Timers } from './timers';
+import type { Timers } from '../timers';
 
 /** A screen in the room. */
 interface Place {

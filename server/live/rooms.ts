@@ -3,7 +3,7 @@ import type { Handlers } from './receiver';
 import { openRoom } from './room';
 import type { Room } from './room';
 import type { Message, Screen } from './screen';
-import type { Timers } from './timers';
+import type { Timers } from '../timers';
 
 export interface RoomsOptions {
   services: Pick<Services, 'store' | 'runs' | 'describeEvent' | 'logger'>;

@@ -1,4 +1,4 @@
-import type { Timers } from './timers';
+import type { Timers } from '../timers';
 
 export interface Throttle<T> {
   put(value: T): void;

@@ -99,6 +99,10 @@ test.each(['https://elsewhere.example', 'null', 'http://127.0.0.1:1'])('rule 7: 
   await expect(connected(world.client({ extraHeaders: { origin }, transports: ['polling'] }))).rejects.toThrow();
 });
 
+test('rule 7: a name made to point at this machine is refused', async () => {
+  await expect(connected(world.client({ extraHeaders: { host: 'rebound.example' } }))).rejects.toThrow();
+});
+
 test('rule 7: a page of this server is let in', async () => {
   await expect(connected(world.client({ extraHeaders: { origin: world.url } }))).resolves.toBeTruthy();
 });

@@ -1,6 +1,5 @@
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import { EventEmitter } from 'node:events';
 import { pino } from 'pino';
 import { io } from 'socket.io-client';
 import type { Socket } from 'socket.io-client';
@@ -8,9 +7,11 @@ import type { Impact } from '../../../lib/impact';
 import { eventNowMs } from '../../../lib/wire';
 import type { ClientToServer, Event, Identity, JoinAck, PlainAck, ServerToClient, StoredAdvisory } from '../../../lib/wire';
 import { openLive } from '../../../server/live';
-import type { Timers } from '../../../server/live';
-import type { Bus, BusEvents, Services } from '../../../server/services';
+import { makeBus } from '../../../server/bus';
+import type { Services } from '../../../server/services';
+import { readSettings } from '../../../server/settings';
 import type { EventRecord } from '../../../server/store/model';
+import { handTimers } from '../handTimers';
 import { advisory as sampleAdvisory, impact as sampleImpact } from '../../app/sample';
 
 export type Client = Socket<ServerToClient, ClientToServer>;
@@ -19,35 +20,6 @@ export const KEYS: Record<string, Identity> = {
   'viewer-key': { id: 'k1', name: 'Wall', role: 'viewer' },
   'operator-key': { id: 'k2', name: 'Duty desk', role: 'operator' },
 };
-
-/** Timers that pass when told to. */
-export function handTimers(): Timers & { pass(ms: number): void } {
-  let nowMs = 0;
-  let timers: { atMs: number; everyMs: number | null; run: () => void }[] = [];
-  const add = (everyMs: number | null, ms: number, run: () => void): (() => void) => {
-    const timer = { atMs: nowMs + ms, everyMs, run };
-    timers.push(timer);
-    return () => {
-      timers = timers.filter((other) => other !== timer);
-    };
-  };
-  return {
-    every: (ms, run) => add(ms, ms, run),
-    later: (ms, run) => add(null, ms, run),
-    pass(ms) {
-      const end = nowMs + ms;
-      for (;;) {
-        const [next] = timers.filter((timer) => timer.atMs <= end).sort((a, b) => a.atMs - b.atMs);
-        if (!next) break;
-        nowMs = next.atMs;
-        if (next.everyMs === null) timers = timers.filter((other) => other !== next);
-        else next.atMs += next.everyMs;
-        next.run();
-      }
-      nowMs = end;
-    },
-  };
-}
 
 /** What a door lets through when it is opened; open until it is shut. */
 export function gate(): { shut(): void; open(): void; pass(): Promise<void> } {
@@ -112,27 +84,15 @@ export function memoryStore(eventId = 'e1') {
   };
 }
 
-export function emitterBus(): Bus {
-  const emitter = new EventEmitter();
-  return {
-    emit: (name, payload) => void emitter.emit(name, payload),
-    on(name, listener) {
-      const heard = listener as (payload: BusEvents[keyof BusEvents]) => void;
-      emitter.on(name, heard);
-      return () => void emitter.off(name, heard);
-    },
-  };
-}
-
 /** The live server on a loopback port, over a memory store, with time turned by hand. */
 export async function liveWorld() {
   const kept = memoryStore();
-  const bus = emitterBus();
+  const bus = makeBus();
   const timers = handTimers();
   const keys = new Map(Object.entries(KEYS));
   const wall = { ms: Date.parse('2026-12-01T00:00:00Z') };
   const services: Services = {
-    settings: {} as Services['settings'],
+    settings: readSettings({}),
     logger: pino({ level: 'silent' }),
     store: kept.store,
     auth: {
