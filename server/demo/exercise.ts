@@ -8,8 +8,6 @@ import type { Scenario } from './scenario';
 type Needed = Pick<Services, 'store' | 'bus' | 'runs' | 'clock' | 'inspectLayer'>;
 
 const ADVISORIES_AT_START = 3;
-/** After each issue the exercise stands where a room would be at work on it. */
-const CLOCK_AFTER_ISSUE_MS = 2 * 3_600_000;
 const ISSUER = 'demo';
 
 /** The exercise that ships with the program: loads it, and issues its advisories one by one through the common way in. */
@@ -27,11 +25,8 @@ export function demoExercise(services: Needed, scenario: Scenario) {
 
   async function issue(event: EventRecord, index: number, by: string): Promise<Accepted> {
     const { fileName, bytes } = scenario.advisories[index];
-    const accepted = await acceptAdvisory(services, { event, source: { bytes, contentType: 'text/plain', fileName }, by, idempotencyKey: keyOf(index) });
+    const accepted = await acceptAdvisory(services, { event, source: { bytes, contentType: 'text/plain', fileName }, by, idempotencyKey: keyOf(index), setsClock: true });
     if (!accepted.ok) throw new Error(`Demo advisory ${fileName} cannot be read: ${accepted.errors[0]?.message}`);
-    const startsAt = new Date(Date.parse(accepted.advisory.issuedAt) + CLOCK_AFTER_ISSUE_MS).toISOString();
-    await store.events.setClock(event.id, { startsAt, anchoredAt: new Date(clock.nowMs()).toISOString(), rate: event.clock?.rate ?? 1 });
-    bus.emit('event', { eventId: event.id });
     return accepted;
   }
 

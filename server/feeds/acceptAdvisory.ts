@@ -6,8 +6,8 @@ import { holdsNul } from '../holdsNul';
 import type { Services } from '../services';
 import type { EventRecord, Source } from '../store';
 
-/** An exercise that was given no clock starts this long after the first advisory put into it. */
-const CLOCK_STARTS_AFTER_MS = 2 * 3_600_000;
+/** An exercise's clock is set this long after the issue of an advisory, where a room would be at work on it. */
+const CLOCK_AFTER_ISSUE_MS = 2 * 3_600_000;
 
 /** How the sender says a file is to be read; without it, the form is told from the content. */
 export type HowToRead = Pick<ReadOptions, 'format' | 'technique' | 'cycle'>;
@@ -20,6 +20,8 @@ export interface Received {
   by: string;
   /** Same key and event again: the same answer again, and nothing new. */
   idempotencyKey: string | null;
+  /** The exercise's clock goes to this advisory; without it, only a first advisory sets the clock of an exercise that has none. */
+  setsClock?: boolean;
 }
 
 export type Accepted =
@@ -28,15 +30,18 @@ export type Accepted =
 
 type Needed = Pick<Services, 'store' | 'bus' | 'runs' | 'clock'>;
 
+const setsClock = ({ event, setsClock: wanted = false }: Pick<Received, 'event' | 'setsClock'>): boolean => event.exercise && (wanted || event.clock === null);
+
 /**
- * Reads and checks a file as it was received, against the event's clock and the advisory before it. Stores nothing. An exercise
- * without a clock gets its own from this advisory, so there is no now yet to hold it against.
+ * Reads and checks a file as it was received, against the event's clock and the advisory before it. Stores nothing. Where the
+ * advisory is to set the clock, there is no now to hold it against.
  */
-export async function readReceived({ store, clock }: Pick<Needed, 'store' | 'clock'>, { event, source, how = {} }: Pick<Received, 'event' | 'source' | 'how'>): Promise<Reading> {
+export async function readReceived({ store, clock }: Pick<Needed, 'store' | 'clock'>, received: Pick<Received, 'event' | 'source' | 'how' | 'setsClock'>): Promise<Reading> {
+  const { event, source, how = {} } = received;
   const decoded = decodeText(source.bytes);
   if (!decoded.ok) return { ok: false, format: how.format ?? null, errors: [{ message: decoded.message }] };
   const previous = await store.advisories.latest(event.id);
-  const now = event.exercise && event.clock === null ? {} : { nowMs: eventNowMs(event.clock, clock.nowMs()) };
+  const now = setsClock(received) ? {} : { nowMs: eventNowMs(event.clock, clock.nowMs()) };
   const reading = readAdvisory(decoded.text, { ...how, ...now, ...(previous ? { previous } : {}) });
   if (reading.ok && holdsNul(reading.advisory)) return { ok: false, format: reading.format, errors: [{ message: 'a name or number holds a NUL character (\\u0000): take it out' }] };
   return reading;
@@ -68,7 +73,7 @@ export async function acceptAdvisory(services: Needed, received: Received): Prom
       return { ok: false, reason: 'key-reused', errors: [{ message: `the Idempotency-Key was used before, for advisory ${advisory.number}, with other content: give each advisory a key of its own` }] };
     }
   } else {
-    if (event.exercise && event.clock === null) await startClock(services, event.id, reading.advisory);
+    if (setsClock(received)) await setClock(services, event, reading.advisory);
     bus.emit('advisory', { eventId: event.id, advisory });
     runs.request(event.id);
   }
@@ -76,8 +81,8 @@ export async function acceptAdvisory(services: Needed, received: Received): Prom
   return { ok: true, advisory, revision, repeated };
 }
 
-async function startClock({ store, bus, clock }: Needed, eventId: string, { issuedAt }: Advisory): Promise<void> {
-  const startsAt = new Date(Date.parse(issuedAt) + CLOCK_STARTS_AFTER_MS).toISOString();
-  await store.events.setClock(eventId, { startsAt, anchoredAt: new Date(clock.nowMs()).toISOString(), rate: 1 });
-  bus.emit('event', { eventId });
+async function setClock({ store, bus, clock }: Needed, event: EventRecord, { issuedAt }: Advisory): Promise<void> {
+  const startsAt = new Date(Date.parse(issuedAt) + CLOCK_AFTER_ISSUE_MS).toISOString();
+  await store.events.setClock(event.id, { startsAt, anchoredAt: new Date(clock.nowMs()).toISOString(), rate: event.clock?.rate ?? 1 });
+  bus.emit('event', { eventId: event.id });
 }

@@ -82,6 +82,22 @@ test('an exercise without a clock gets it from its first advisory, which is then
   expect(await codes(exercise)).not.toContain('issued-in-future');
 });
 
+test('an exercise whose clock goes with its advisories is taken to two hours after the issue, at the rate it runs, before it is computed', async () => {
+  const clock = { startsAt: '2004-08-01T00:00:00Z', anchoredAt: '2004-08-05T00:00:00Z', rate: 6 };
+  const exercise = await services.store.events.add({ ...event, id: 'x', exercise: true, clock });
+  const whenAsked: Promise<EventRecord | null>[] = [];
+  const runs = { ...services.runs, request: () => void whenAsked.push(services.store.events.get('x')) };
+  const accepted = await acceptAdvisory({ ...services, runs }, { ...received(), event: exercise, setsClock: true });
+  expect(accepted).toMatchObject({ ok: true, advisory: { issuedAt: '2004-08-03T09:00:00Z' } });
+  expect(accepted.ok && accepted.advisory.warnings.map(({ code }) => code)).not.toContain('issued-in-future');
+  expect((await whenAsked[0])?.clock).toEqual({ startsAt: '2004-08-03T11:00:00.000Z', anchoredAt: '2004-08-05T00:00:00.000Z', rate: 6 });
+});
+
+test('the clock of a real event is never set', async () => {
+  await acceptAdvisory(services, { ...received(), setsClock: true });
+  expect((await services.store.events.get('e'))?.clock).toBeNull();
+});
+
 test('a file is held against the advisory before it', async () => {
   await acceptAdvisory(services, received());
   const { warnings } = (await readReceived(services, received(bulletin('al102017.fstadv.004')))) as { warnings: { code: string }[] };
