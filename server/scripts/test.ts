@@ -31,7 +31,7 @@ const outcomes = [
   await check('lint', bin('eslint'), ['.', '--max-warnings', '0']),
   await check('types', bin('tsc'), ['--noEmit']),
   await check('unused code and packages', bin('knip'), []),
-  await suite('unit and integration', UNIT_REPORT, bin('vitest'), ['run', '--reporter=dot', '--reporter=json', `--outputFile.json=${UNIT_REPORT}`], {}, (report: { numPassedTests: number; numFailedTests: number; numPendingTests: number }) => ({
+  await suite('unit and integration', UNIT_REPORT, bin('vitest'), ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${UNIT_REPORT}`], {}, (report: { numPassedTests: number; numFailedTests: number; numPendingTests: number }) => ({
     passed: report.numPassedTests,
     // A skipped test has not passed.
     failed: report.numFailedTests + report.numPendingTests,
