@@ -92,7 +92,7 @@ async function storm(seed: number): Promise<string[]> {
 
   for (let step = 0; step < STEPS; step++) {
     const screen = screens[below(SCREENS)];
-    switch (below(12)) {
+    switch (below(14)) {
       case 0:
       case 1:
         screen.cut();
@@ -108,6 +108,12 @@ async function storm(seed: number): Promise<string[]> {
         break;
       case 5:
         world.reads.open();
+        break;
+      case 12:
+        world.answers.shut();
+        break;
+      case 13:
+        world.answers.open();
         break;
       case 6:
         failing = !failing && below(3) === 0;
@@ -128,6 +134,7 @@ async function storm(seed: number): Promise<string[]> {
 
   failing = false;
   world.reads.open();
+  world.answers.open();
   for (const impact of [...untold, world.commit()]) world.bus.emit('impact', impact);
   screens.forEach((screen) => screen.join());
   await Promise.all(screens.map((screen) => screen.at(world.record.revision)));

@@ -1,7 +1,7 @@
 import { afterEach, beforeEach, expect, test } from 'vitest';
 import { joinAckSchema } from '../../../lib/wire';
 import { MOST_MISSED } from '../../../server/live/limits';
-import { zoneRow } from '../../app/sample';
+import { advisory, zoneRow } from '../../app/sample';
 import { connected, hearing, joined, liveWorld, settled } from './world';
 import type { LiveWorld } from './world';
 
@@ -66,20 +66,40 @@ test('rule 2: an event that is not there is said not to be there, and the connec
   expect(await joined(client, null)).toMatchObject({ ok: true });
 });
 
-test('rule 3: what is published while a join is being answered follows the answer, once', async () => {
+test.each([
+  ['before the store is read', 'reads', [3]],
+  ['after the store is read', 'answers', [1, 2, 3]],
+] as const)('rule 3: what is published while a join is being answered, %s, comes with or after the answer, once', async (_when, door, expected) => {
+  world.commit();
+  // A screen is inside, so that the room stands.
+  await joined(await connected(world.client()), null);
   const client = await connected(world.client());
   const heard = hearing(client, 'impact');
-  world.commit();
-  world.reads.shut();
+  world[door].shut();
   const answer = joined(client, null);
   await settledOnServer(world);
   world.publish();
   world.publish();
-  world.reads.open();
+  world[door].open();
   const ack = await answer;
   await settled(client);
   const held = 'snapshot' in ack ? ack.snapshot.impact?.revision : null;
-  expect([held, ...revisions(heard)]).toEqual([3]);
+  expect([held, ...revisions(heard)]).toEqual(expected);
+});
+
+test('rule 3: an advisory accepted while a join is being answered is told after it, unless the answer has it', async () => {
+  await joined(await connected(world.client()), null);
+  const client = await connected(world.client());
+  const heard = hearing(client, 'advisory');
+  world.reads.shut();
+  const answer = joined(client, null);
+  await settledOnServer(world);
+  world.bus.emit('advisory', { eventId: 'e1', advisory: world.accept() });
+  world.bus.emit('advisory', { eventId: 'e1', advisory: advisory(2) });
+  world.reads.open();
+  expect(await answer).toMatchObject({ snapshot: { advisory: { id: 'a1' } } });
+  await settled(client);
+  expect(heard.map(({ advisory }) => advisory.id)).toEqual(['a2']);
 });
 
 test('rule 3: what was stored before the answer and told after it does not come twice', async () => {

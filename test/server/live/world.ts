@@ -36,7 +36,7 @@ export function gate(): { shut(): void; open(): void; pass(): Promise<void> } {
   };
 }
 
-/** One event, kept in memory, whose reads pass a gate before they look. */
+/** One event, kept in memory, whose reads pass one gate before they look and one before they answer. */
 export function memoryStore(eventId = 'e1') {
   const record: EventRecord = {
     id: eventId,
@@ -52,9 +52,12 @@ export function memoryStore(eventId = 'e1') {
   const impacts: Impact[] = [];
   const advisories: StoredAdvisory[] = [];
   const reads = gate();
+  const answers = gate();
   const behind = async <T>(look: () => T): Promise<T> => {
     await reads.pass();
-    return look();
+    const seen = look();
+    await answers.pass();
+    return seen;
   };
   const store = {
     events: { get: (id: string) => behind(() => (id === eventId ? { ...record } : null)) },
@@ -69,6 +72,7 @@ export function memoryStore(eventId = 'e1') {
     store,
     record,
     reads,
+    answers,
     /** Puts the next impact into the store, as `publish` does, without telling anyone. */
     commit(over: Partial<Impact> = {}): Impact {
       const impact = sampleImpact(record.revision + 1, { eventId, ...over });
