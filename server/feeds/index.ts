@@ -2,3 +2,4 @@
 export { acceptAdvisory, readReceived } from './acceptAdvisory';
 export type { Accepted } from './acceptAdvisory';
 export { acceptLayer } from './acceptLayer';
+export { openInbox } from './openInbox';
