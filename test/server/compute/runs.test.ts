@@ -8,11 +8,11 @@ import type { RunFailed } from '../../../lib/wire';
 import { makeBus } from '../../../server/bus';
 import { openRuns } from '../../../server/compute/runs';
 import type { Pool } from '../../../server/compute/pool';
-import { assemble, chunk, compile, gridChunk, inspectLayer, sample, track } from '../../../server/compute/worker';
 import type { Bus, Runs } from '../../../server/services';
 import { openStore } from '../../../server/store';
 import type { OpenedStore } from '../../../server/store';
 import { recurving } from '../../hazard/storms';
+import { here } from './here';
 import { islandLayers, writeIsland } from './world';
 
 const folder = mkdtempSync(join(tmpdir(), 'leeboard-runs-'));
@@ -27,18 +27,6 @@ let runs: Runs;
 let published: Impact[];
 let failures: RunFailed[];
 let dataDir: string;
-
-const here: Pool = {
-  threads: 1,
-  inspectLayer: async (task) => inspectLayer(task),
-  compile: async (task) => compile(task),
-  track: async (task) => track(task),
-  sample: async (task) => sample(task),
-  chunk: async (task) => chunk(task),
-  gridChunk: async (task) => gridChunk(task),
-  assemble: async (task) => assemble(task),
-  close: async () => {},
-};
 
 function open(pool: Pool = here): Runs {
   return openRuns({ settings: { MEMBERS: 10 }, store, bus, logger: pino({ level: 'silent' }), clock: { nowMs: () => Date.parse('2031-09-19T11:00:00Z') }, demoCoastFile: coast, pool });

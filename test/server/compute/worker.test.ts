@@ -6,11 +6,12 @@ import { booleanPointInPolygon } from '@turf/turf';
 import type { FeatureCollection, MultiPolygon } from 'geojson';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { openAssets, pageOfAssets } from '../../../server/compute/bulk';
-import { assemble, chunk, compile, gridChunk, inspectLayer, sample, track } from '../../../server/compute/worker';
+import { compile, track } from '../../../server/compute/worker';
 import { openPool } from '../../../server/compute/pool';
 import type { Pool } from '../../../server/compute/pool';
 import { runMembers } from '../../../server/compute/runMembers';
 import { recurving } from '../../hazard/storms';
+import { here } from './here';
 import { islandLayers, writeIsland } from './world';
 
 const folder = mkdtempSync(join(tmpdir(), 'leeboard-compute-'));
@@ -23,19 +24,6 @@ const run = { eventId: 'E', advisoryId: 'A', issuedAtMs: Date.parse(recurving.is
 const exposure = compile({ key: 'island', layers: islandLayers(), coastFile });
 const trackAnswer = track({ advisory: recurving, exposure, run, earlier: null });
 const read = (bytes: Uint8Array | undefined) => JSON.parse(gunzipSync(bytes!).toString()) as FeatureCollection<MultiPolygon>;
-
-/** The same tasks without threads. */
-const here: Pool = {
-  threads: 1,
-  inspectLayer: async (task) => inspectLayer(task),
-  compile: async (task) => compile(task),
-  track: async (task) => track(task),
-  sample: async (task) => sample(task),
-  chunk: async (task) => chunk(task),
-  gridChunk: async (task) => gridChunk(task),
-  assemble: async (task) => assemble(task),
-  close: async () => {},
-};
 
 async function members(pool: Pool) {
   const sampled = await pool.sample({ advisory: recurving, members: MEMBERS, seed: 3, exposure, coastFile });
