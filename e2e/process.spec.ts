@@ -1,3 +1,5 @@
+import { mkdirSync, writeFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { expect, test } from '@playwright/test';
 import { newDataDir, removeDataDir, startServerProcess } from '../test/server/serverProcess';
 import type { ServerProcess } from '../test/server/serverProcess';
@@ -21,6 +23,7 @@ const eventOf = async (from: ServerProcess) => ((await (await from.get('/api/v1/
 
 test('the first start loads the exercise and prints one link that signs one person in, once', async ({ browser }) => {
   server = await startServerProcess(dataDir, { LEEBOARD_MEMBERS: '20' });
+  await expect.poll(() => server!.printed()).toMatch(/^Leeboard is at [^\n]*\n$/);
   const links = [...server.printed().matchAll(/http:\/\/\S+\/sign-in\?token=\S+/g)].map(([link]) => link);
   expect(links).toHaveLength(1);
   expect(await eventOf(server)).toMatchObject({ demo: true, advisoriesLeft: 5 });
@@ -72,11 +75,41 @@ test('killed while it computes, it keeps the advisory it answered for, computes 
   expect((await eventOf(server)).revision).toBeGreaterThan(revision);
 });
 
-test('a setting that is wrong stops the start with one line', async () => {
-  const refused = await startServerProcess(dataDir, { LEEBOARD_MEMBERS: 'many' }).then(
-    () => '',
-    (error: Error) => error.message,
-  );
-  expect(refused).toMatch(/LEEBOARD_MEMBERS/);
-  expect(refused.trim().split('\n')).toHaveLength(1);
+test('a forecast put into the watched folder is issued and computed', async () => {
+  server = await startServerProcess(dataDir, { LEEBOARD_MEMBERS: '20' });
+  const { id, advisoryId } = await eventOf(server);
+  const source = await server.get(`/api/v1/events/${id}/advisories/${advisoryId}/source`);
+  const corrected = (await source.text()).replace(/ADVISORY NUMBER +(\d+)/i, 'ADVISORY NUMBER  $1...CORRECTED');
+  const folder = join(dataDir, 'inbox', id);
+  mkdirSync(folder, { recursive: true });
+  writeFileSync(join(folder, 'corrected.txt'), corrected);
+  await expect
+    .poll(async () => {
+      const impact = (await (await server!.get(`/api/v1/events/${id}/impact`)).json()) as { advisoryId: string; stage: string };
+      return impact.advisoryId !== advisoryId && impact.stage;
+    }, { timeout: 30_000 })
+    .toBe('members');
+});
+
+test.describe('what stops the start is told in one line, and nothing else is printed', () => {
+  const refusal = (env: Record<string, string>): Promise<string> =>
+    startServerProcess(dataDir, env).then(
+      () => 'it started',
+      (error: Error) => error.message.replace('The server did not start: ', '').trim(),
+    );
+
+  test('a setting that is wrong', async () => {
+    expect(await refusal({ LEEBOARD_MEMBERS: 'many' })).toMatch(/^Leeboard did not start: LEEBOARD_MEMBERS[^\n]*$/);
+  });
+
+  test('a port that is taken', async () => {
+    server = await startServerProcess(dataDir, { LEEBOARD_MEMBERS: '20', LEEBOARD_DEMO: 'off' });
+    expect(await refusal({ LEEBOARD_PORT: new URL(server.url).port })).toMatch(/^Leeboard did not start: [^\n]* is taken[^\n]*LEEBOARD_PORT[^\n]*$/);
+  });
+
+  test('a data folder that is a file', async () => {
+    const file = join(dataDir, 'file');
+    writeFileSync(file, '');
+    expect(await refusal({ LEEBOARD_DATA_DIR: file })).toMatch(/^Leeboard did not start: LEEBOARD_DATA_DIR[^\n]*$/);
+  });
 });
