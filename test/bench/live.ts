@@ -47,7 +47,7 @@ const shifted = (advisory: Advisory, round: number): Advisory => ({
   points: advisory.points.map((point) => ({ ...point, lon: Math.round((point.lon + 0.02 * (round + 1)) * 100) / 100 })),
 });
 
-async function metric(text: string, name: string): Promise<number> {
+function metric(text: string, name: string): number {
   const line = text.split('\n').find((entry) => entry.startsWith(`${name} `) || entry.startsWith(`${name}{`));
   return line ? Number(line.slice(line.lastIndexOf(' ') + 1)) : NaN;
 }
@@ -62,6 +62,8 @@ export async function benchLive(): Promise<Row[]> {
     const advisories = (await (await server.get(`/api/v1/events/${event.id}/advisories?limit=1`)).json()) as { items: Advisory[] };
     const [advisory] = advisories.items;
     const [first, second] = await Promise.all([openScreen(server.url, server.key, event.id), openScreen(server.url, server.key, event.id)]);
+    // Reading the figures starts their delays anew: what the start cost is left out.
+    await server.get('/metrics');
     const trackMs: number[] = [];
     const membersMs: number[] = [];
     const apartMs: number[] = [];
@@ -86,9 +88,9 @@ export async function benchLive(): Promise<Row[]> {
       row('POST to track impact at the second screen, median of 10', median(trackMs), 'ms'),
       row('POST to members impact at the second screen, median of 10', median(membersMs), 'ms'),
       row('two screens apart, worst of 10', Math.max(...apartMs), 'ms'),
-      row('server event-loop delay, p99', (await metric(metrics, 'nodejs_eventloop_lag_p99_seconds')) * 1000, 'ms'),
-      row('server event-loop delay, greatest', (await metric(metrics, 'nodejs_eventloop_lag_max_seconds')) * 1000, 'ms'),
-      row('server memory (resident)', (await metric(metrics, 'process_resident_memory_bytes')) / 1e6, 'MB'),
+      row('server event-loop delay, p99', metric(metrics, 'leeboard_nodejs_eventloop_lag_p99_seconds') * 1000, 'ms'),
+      row('server event-loop delay, greatest', metric(metrics, 'leeboard_nodejs_eventloop_lag_max_seconds') * 1000, 'ms'),
+      row('server memory (resident)', metric(metrics, 'leeboard_process_resident_memory_bytes') / 1e6, 'MB'),
       row('impact message', bytes / 1000, 'kB'),
     ];
   } finally {
