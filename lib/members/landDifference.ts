@@ -1,11 +1,7 @@
-/** Kaplan and DeMaria (1995), J. Appl. Meteor. 34, 2499-2512: decay rate per hour and the wind it decays to. */
-const DECAY_PER_HOUR = 0.095;
-const BACKGROUND_KT = 26.7;
+import { decayedOverLandKt } from '../wind';
+
 const LEAST_FACTOR = 0.25;
 const GREATEST_FACTOR = 2;
-
-const decayed = (windKt: number, hours: number): number =>
-  windKt <= BACKGROUND_KT ? windKt : BACKGROUND_KT + (windKt - BACKGROUND_KT) * Math.exp(-DECAY_PER_HOUR * hours);
 
 /**
  * What land takes from a member beyond what the forecast already took. A forecast contains the land along its own track, so a
@@ -26,8 +22,8 @@ export function applyLandDifference(
   for (let i = 1; i < leadHours.length; i++) {
     const hours = leadHours[i] - leadHours[i - 1];
     const memberKt = ratio[offset + i] * forecastKt[i] * factor;
-    if (memberOverLand[i] && !forecastOverLand[i]) factor *= memberKt > 0 ? decayed(memberKt, hours) / memberKt : 1;
-    else if (forecastOverLand[i] && !memberOverLand[i] && forecastKt[i] > BACKGROUND_KT) factor *= forecastKt[i] / decayed(forecastKt[i], hours);
+    if (memberOverLand[i] && !forecastOverLand[i]) factor *= memberKt > 0 ? decayedOverLandKt(memberKt, hours) / memberKt : 1;
+    else if (forecastOverLand[i] && !memberOverLand[i] && forecastKt[i] > 0) factor *= forecastKt[i] / decayedOverLandKt(forecastKt[i], hours);
     factor = Math.min(Math.max(factor, LEAST_FACTOR), GREATEST_FACTOR);
     ratio[offset + i] *= factor;
   }
